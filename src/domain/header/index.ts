@@ -1,0 +1,2 @@
+/* The public face of headers. */
+export * from './header';
