@@ -2,6 +2,7 @@
 export * from './axes';
 export * from './basis';
 export * from './equipment';
+export * from './canonical';
 export * from './external-sheets';
 export * from './field-conditions';
 export * from './fields';
