@@ -1,0 +1,120 @@
+/* How stages, roles, seats and acts are called in sentences. */
+import { type Act } from './permission-table';
+import { type Role, type SeatRole, type Stage } from './types';
+
+export const STAGE_WORDS: Record<Stage, string> = {
+  draft: 'draft',
+  scenarios: 'scenario analysis',
+  check: 'calculation check',
+  approval: 'approval',
+  field: 'field verification',
+  'in-force': 'in force',
+  'due-for-removal': 'due for removal',
+  removed: 'removed',
+  'on-hold': 'on hold',
+  withdrawn: 'withdrawn',
+  refused: 'refused',
+};
+
+export const ROLE_WORDS: Record<Role, string> = {
+  originator: 'originator',
+  checker: 'checker',
+  approver: 'approver',
+  operations: 'operations',
+  coordinator: 'site coordinator',
+  auditor: 'auditor',
+};
+
+/** The holder of a seat, as a sentence calls them. */
+export const SEAT_WORDS: Record<SeatRole, string> = {
+  originator: 'the originator',
+  checker: 'the checker',
+  approver: 'an approver',
+  operations: 'operations',
+};
+
+/** What an act does, to follow "may" or "to". */
+export const ACT_WORDS: Record<Act, string> = {
+  read: 'read it',
+  session: 'keep a session',
+  password: 'change the password',
+  calculate: 'work a calculation',
+  ask: 'ask the relief question',
+  raise: 'raise a case',
+  copy: 'copy it to a new draft',
+  'edit-brief': 'edit the brief',
+  nominate: 'nominate people',
+  'change-systems': 'add or take away systems',
+  'answer-affected': 'answer for an affected system',
+  'edit-document': 'edit the relief basis',
+  'replace-seat': 'replace someone in the case',
+  'PASS-draft': 'send it to scenario analysis',
+  'PASS-draft-graded': 'sign the first issue for its grade',
+  'AUTHORISE-spoken': 'record a spoken authorisation',
+  AUTHORISE: 'authorise the emergency change',
+  'confirm-authorisation': 'confirm the authorisation',
+  'record-acted': 'record that the plant was changed',
+  'PASS-scenarios': 'send it to the calculation check',
+  'RETURN-own': 'take it back',
+  unseen: 'enter the unseen check',
+  reveal: 'reveal the originator’s figures',
+  reconcile: 'reconcile a difference',
+  agree: 'agree a sheet',
+  'undo-agreement': 'undo an agreement',
+  'PASS-check': 'pass the calculation check',
+  'raise-finding': 'raise a finding',
+  'answer-finding': 'answer a finding',
+  'close-finding': 'close a finding',
+  'reopen-finding': 'reopen a finding',
+  SIGN: 'sign the approval',
+  REFUSE: 'refuse the case',
+  require: 'ask for an approval requirement',
+  'RETURN-check': 'return it from the check',
+  'RETURN-approval': 'return it from approval',
+  'RETURN-field': 'return it from the field',
+  CARRY_OVER: 'carry it over to the newly issued revision',
+  HOLD: 'put it on hold',
+  RESUME: 'resume it',
+  WITHDRAW: 'withdraw it',
+  'confirm-approval': 'confirm that an older approval still holds',
+  DROP: 'drop a system from it',
+  'enter-field': 'fill the field sheet',
+  fix: 'record that a discrepancy was put right',
+  'see-again': 'see a line again',
+  'send-back': 'send a discrepancy back to the case',
+  ISSUE: 'confirm the field sheet and put the revision in force',
+  'ask-extension': 'ask for an extension',
+  EXTEND: 'extend a temporary change',
+  'begin-removal': 'begin the removal',
+  'edit-removal': 'edit the removal',
+  'agree-removal': 'agree a sheet of the removal',
+  'sign-removal': 'sign the removal',
+  REMOVE: 'confirm the removal',
+  'do-due': 'report a due item as done',
+  'accept-due': 'accept a due item',
+  'reject-due': 'reject a due item',
+  'waive-due': 'waive a due item',
+  'sign-deficiency': 'sign a deficiency',
+  'record-in-kind': 'record a replacement in kind',
+  'record-impairment': 'record an impairment',
+  'sight-condition': 'record a field condition as seen',
+  'move-device': 'move a fitted device',
+  'sign-in-kind': 'sign a replacement in kind',
+  'draft-rules': 'draft site rules',
+  'sign-rules-1': 'sign site rules first',
+  'run-moved-results': 'work the moved results',
+  'sign-rules-2': 'give site rules the second signature',
+  administer: 'administer people, roles and units',
+  upload: 'upload a file',
+  attach: 'attach a file',
+  'export-evidence': 'export the evidence',
+  'read-trail-of-case': 'read the trail of the case',
+  'read-site-trail': 'read the trail of the site',
+  'audit-lists': 'read the audit lists',
+};
+
+/** Joins words as a sentence does: "a, b or c". */
+export function anyOf(words: readonly string[], last = 'or'): string {
+  if (words.length < 2) return words.join('');
+  return `${words.slice(0, -1).join(', ')} ${last} ${words.at(-1) ?? ''}`;
+}
