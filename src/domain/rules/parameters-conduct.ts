@@ -1,0 +1,56 @@
+/* Parameters of conduct: dates, reminders, counts of people. They never move a result, so no signature binds them. */
+import { parametersOf, type Parameter } from './parameter-row';
+
+const PRACTICE = 'common practice, no source';
+
+export const CONDUCT_PARAMETERS: readonly Parameter[] = parametersOf('conduct', [
+  ['approvers', 'approvers who must sign', 'people', 1, [1, 4], 'site'],
+  ['affectedAnswerAge', 'an answer of an affected system holds', 'days', 90, [30, 180], PRACTICE],
+  [
+    'temporaryMax',
+    'longest temporary change in all',
+    'days',
+    90,
+    [7, 365],
+    '29 CFR 1910.119(l)(2)(iv) asks for a time limit; days by practice',
+  ],
+  ['extensionsMax', 'extensions of a temporary change', '', 1, [0, 2], PRACTICE],
+  ['temporaryGap', 'temporary changes this close count as one', 'days', 30, [7, 90], PRACTICE],
+  ['emergencyConfirm', 'spoken authorisation confirmed within', 'hours', 12, [4, 24], PRACTICE],
+  ['emergencyAnalysis', 'analysis of an emergency', 'days', 3, [1, 5], PRACTICE],
+  ['emergencyCheck', 'check of an emergency', 'days', 7, [2, 14], PRACTICE],
+  ['impairmentMax', 'longest isolation of a device in service', 'hours', 12, [1, 72], PRACTICE],
+  [
+    'impairmentReminder',
+    'reminder after this share of an impairment',
+    'fraction',
+    0.75,
+    [0.25, 0.9],
+    PRACTICE,
+  ],
+  ['approvalAge', 'an approval not installed holds', 'months', 12, [3, 24], PRACTICE],
+  ['shortfallMax', 'a deficiency is due within', 'days', 90, [14, 365], PRACTICE],
+  [
+    'revalidation',
+    'revalidation of a basis',
+    'months',
+    60,
+    [12, 120],
+    'cycle of hazard analyses, 29 CFR 1910.119(e)(6)',
+  ],
+  ['testInterval', 'test interval shown', 'months', 60, [6, 120], 'API 510, general, from memory'],
+  ['shelfLife', 'shelf life of a test certificate', 'months', 12, [3, 24], PRACTICE],
+  ['afterStartUpDays', 'papers marked "after" are due within', 'days', 30, [7, 90], PRACTICE],
+  ['checkDue', 'a check is due within', 'working days', 5, [1, 30], PRACTICE],
+  ['approvalDue', 'an approval is due within', 'working days', 3, [1, 30], PRACTICE],
+  ['findingDue', 'the answer to a finding is due within', 'working days', 10, [1, 60], PRACTICE],
+  ['reminders', 'reminders before a due date', 'days', '30,14,7,3,1,0', undefined, PRACTICE],
+  ['deputyAfter', 'overdue: the deputy is told after', 'days', 3, [1, 30], PRACTICE],
+  ['managerAfter', 'overdue: the site manager is told after', 'days', 7, [1, 60], PRACTICE],
+  ['digestAt', 'time of the digest', 'site time', '07:00', undefined, PRACTICE],
+  ['asFoundHigh', 'opened above this of set: a deficiency', 'of set', 1.1, [1.03, 1.25], 'from memory'],
+  ['asFoundLow', 'opened below this of set: a deficiency', 'of set', 0.9, [0.75, 0.97], 'from memory'],
+  ['photosAsked', 'photographs asked for', '', 'plate,locks,discharge', undefined, PRACTICE],
+  ['photoBytes', 'largest photograph', 'MB', 5, [1, 20], PRACTICE],
+  ['editionSet', 'edition set of the site', '', 'current', undefined, 'site'],
+]);

@@ -1,0 +1,3 @@
+/* The public face of the standard scenarios. */
+export * from './list';
+export { type StandardScenario, type StartingSentence } from './standard';
