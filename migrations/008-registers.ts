@@ -63,9 +63,23 @@ const REACH = [
   ) STRICT`,
   `CREATE INDEX p_depends_tag ON p_depends (site_id, tag)`,
   `CREATE INDEX p_depends_document ON p_depends (document_id, truth)`,
+  `CREATE TABLE search_pages (
+    id INTEGER PRIMARY KEY,
+    kind TEXT NOT NULL,
+    site_id TEXT NOT NULL REFERENCES sites (id),
+    of_id TEXT NOT NULL,
+    place TEXT NOT NULL,
+    hides INTEGER NOT NULL CHECK (hides IN (0, 1)),
+    title TEXT NOT NULL,
+    body TEXT NOT NULL
+  ) STRICT`,
+  `CREATE INDEX search_pages_of ON search_pages (of_id)`,
   `CREATE VIRTUAL TABLE search USING fts5 (
-    kind UNINDEXED, site_id UNINDEXED, document_id UNINDEXED, place UNINDEXED, hides UNINDEXED,
-    title, body, tokenize = "unicode61 remove_diacritics 2")`,
+    title, body, content = 'search_pages', content_rowid = 'id', tokenize = "unicode61 remove_diacritics 2")`,
+  `CREATE TRIGGER search_pages_added AFTER INSERT ON search_pages
+    BEGIN INSERT INTO search (rowid, title, body) VALUES (NEW.id, NEW.title, NEW.body); END`,
+  `CREATE TRIGGER search_pages_gone AFTER DELETE ON search_pages
+    BEGIN INSERT INTO search (search, rowid, title, body) VALUES ('delete', OLD.id, OLD.title, OLD.body); END`,
 ];
 
 /** Makes the tables. */
