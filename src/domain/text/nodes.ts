@@ -53,7 +53,7 @@ function isQuantity(value: unknown): boolean {
 }
 
 /** True when the attributes are those that a node of ours needs. */
-function ownAttributesHold(type: string, attrs: Record<string, unknown>): boolean {
+export function ownAttributesHold(type: string, attrs: Record<string, unknown>): boolean {
   if (type === 'figure') {
     const side = attrs['side'];
     return (
