@@ -1,0 +1,8 @@
+/* The public face of the HTTP helpers for pages and endpoints. */
+export { answer, json, localPath, refuse, seeOther, viaForm, type AnswerOptions } from './answer';
+export { BODY_LIMIT, readBody, readSent } from './body';
+export { etagOf, onceFrom, versionFrom, type Once } from './conditional';
+export { type Context, type Sent } from './context';
+export { makeLog, type Log } from './log';
+export { shownFields, textWithLinks } from './typed';
+export { problemDetails, problemResponse, type ProblemDetails } from './problem';
