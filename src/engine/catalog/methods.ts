@@ -1,5 +1,42 @@
 /* The list of every method, in the order of the reference topics. */
+import { GAS_BACKPRESSURE } from '../methods/a-gas/backpressure';
+import { GAS } from '../methods/a-gas/gas';
+import { GAS_C } from '../methods/a-gas/gas-c';
+import { RATED } from '../methods/a-gas/rated';
+import { STEAM_KSH } from '../methods/b-steam/ksh';
+import { STEAM } from '../methods/b-steam/steam';
+import { LIQUID_BACKPRESSURE } from '../methods/c-liquid/backpressure';
+import { LIQUID } from '../methods/c-liquid/liquid';
+import { LIQUID_NONCERTIFIED } from '../methods/c-liquid/noncertified';
+import { VISCOSITY_FACTOR } from '../methods/c-liquid/viscosity';
+import { FIRE_INSULATION } from '../methods/e-fire/insulation';
+import { FIRE_WETTED } from '../methods/e-fire/wetted';
+import { BLOCKED_OUTLET } from '../methods/f-loads/blocked-outlet';
+import { THERMAL_EXPANSION } from '../methods/f-loads/thermal';
+import { VAPORISATION } from '../methods/f-loads/vaporisation';
+import { ACCUMULATION } from '../methods/h-limits/accumulation';
+import { SET_TOLERANCE } from '../methods/h-limits/tolerance';
+import { LETTERS } from '../methods/i-letters/letter-method';
 import { type Method } from './types';
 
 /** All methods of the engine. */
-export const METHODS: readonly Method[] = [];
+export const METHODS: readonly Method[] = [
+  GAS_BACKPRESSURE,
+  GAS,
+  GAS_C,
+  RATED,
+  STEAM,
+  STEAM_KSH,
+  LIQUID_BACKPRESSURE,
+  LIQUID,
+  LIQUID_NONCERTIFIED,
+  VISCOSITY_FACTOR,
+  FIRE_INSULATION,
+  FIRE_WETTED,
+  BLOCKED_OUTLET,
+  THERMAL_EXPANSION,
+  VAPORISATION,
+  ACCUMULATION,
+  SET_TOLERANCE,
+  LETTERS,
+];

@@ -1,0 +1,129 @@
+/* Reading the vessels of a wetted-fire sheet and showing the wetted area of each. */
+import { fromSI, toSI } from '../../quantity';
+import { type SheetBuilder } from '../../sheet';
+import { SYSTEM_UNITS, type System } from '../common/system';
+import {
+  effectiveHeight,
+  HEADS,
+  type Heads,
+  ORIENTATIONS,
+  type Orientation,
+  vesselHeight,
+  wettedArea,
+} from './geometry';
+
+const CLAUSE = 'API 521, effect of fire on the wetted surface';
+
+/** The most vessels one sheet takes. */
+export const MAX_VESSELS = 20;
+
+/** Names of the n-th vessel's inputs: bare for the first, with _2, _3 … after it. */
+function named(name: string, n: number): string {
+  return n === 1 ? name : `${name}_${n}`;
+}
+
+/** How many vessels the inputs describe: the first gap ends the list. */
+export function vesselCount(sheet: SheetBuilder): number {
+  let count = 1;
+  while (count < MAX_VESSELS && sheet.has(named('D', count + 1))) count += 1;
+  return count;
+}
+
+function length(
+  sheet: SheetBuilder,
+  name: string,
+  unit: string,
+  bounds: { above?: number; min?: number; fallback?: number },
+  tex: string,
+): number {
+  return toSI({ value: sheet.number(name, unit, bounds, tex), unit });
+}
+
+/** Where a shared place (fire height) or a vessel's own input stands; elevation may lie below the fire's base. */
+function readVessel(sheet: SheetBuilder, n: number, unit: string) {
+  const at = (name: string) => named(name, n);
+  const orientation = sheet.word<Orientation>(
+    at('orientation'),
+    ORIENTATIONS,
+    sheet.has(at('L')) ? undefined : 'sphere',
+  );
+  const D = length(sheet, at('D'), unit, { above: 0 }, `D_{${n}}`);
+  const sphere = orientation === 'sphere';
+  const L = sphere ? 0 : length(sheet, at('L'), unit, { min: 0 }, `L_{${n}}`);
+  const heads = sphere ? 'hemispherical' : sheet.word<Heads>(at('heads'), HEADS);
+  const level = length(sheet, at('liquid_level'), unit, { min: 0 }, `h_{${n}}`);
+  const elevation = length(sheet, at('elevation_of_bottom'), unit, {}, `z_{${n}}`);
+  return { vessel: { orientation, D, L, heads }, level, elevation };
+}
+
+/** The tag given for the n-th vessel, or its number. */
+function label(sheet: SheetBuilder, n: number): string {
+  const tag = sheet.inputs[named('tag', n)];
+  return typeof tag === 'string' ? tag : `vessel ${n}`;
+}
+
+/** The steps of one vessel; its wetted area in the system's unit. */
+function vesselSteps(sheet: SheetBuilder, n: number, fireHeight: number, system: System): number {
+  const u = SYSTEM_UNITS[system];
+  const { vessel, level, elevation } = readVessel(sheet, n, u.L);
+  const name = label(sheet, n);
+  const full = vesselHeight(vessel);
+  if (level > full * 1.0001)
+    sheet.refuse(
+      'VALUE_IMPOSSIBLE',
+      named('liquid_level', n),
+      `The liquid level of ${name} is above its inside height of ${fromSI(full, u.L).value.toFixed(2)} ${u.L}.`,
+    );
+  const si = effectiveHeight(vessel, { level, elevation, fireHeight });
+  const height = fromSI(si, u.L).value;
+  sheet.keep('R', fromSI(vessel.D / 2, u.L).value, `\\tfrac{1}{2}D_{${n}}`);
+  sheet.step(
+    {
+      key: `he_${n}`,
+      tex: `h_{e${n}}`,
+      meaning: `wetted height of ${name} that the fire reaches`,
+      value: height,
+      unit: u.L,
+      clause: CLAUSE,
+    },
+    (v) => {
+      const reach = `${v('fire_height')} - ${v(named('elevation_of_bottom', n))}`;
+      const cap = vessel.orientation === 'sphere' ? `\\max(${v('R')},\\ ${reach})` : reach;
+      return `\\max(0,\\ \\min(${v(named('liquid_level', n))},\\ ${cap}))`;
+    },
+  );
+  const area = fromSI(wettedArea(vessel, si), u.area).value;
+  sheet.step(
+    {
+      key: `A_${n}`,
+      tex: `A_{${n}}`,
+      meaning: `wetted area of ${name}, ${describe(vessel.orientation, vessel.heads)}`,
+      value: area,
+      unit: u.area,
+      clause: 'exact geometry of shell and heads',
+    },
+    (v) =>
+      vessel.orientation === 'sphere'
+        ? `\\pi \\cdot ${v(named('D', n))} \\cdot ${v(`he_${n}`)}`
+        : `A_{shell+heads}(${v(named('D', n))},\\ ${v(named('L', n))},\\ ${v(`he_${n}`)})`,
+  );
+  sheet.output(n === 1 ? 'effective_wetted_height' : `effective_wetted_height_${n}`, height, u.L);
+  sheet.output(`wetted_area_${n}`, area, u.area);
+  if (si === 0 && level > 0)
+    sheet.warn('ABOVE_FIRE', `${name} stands above the fire height: no part of its wetted surface counts.`);
+  return area;
+}
+
+function describe(orientation: Orientation, heads: Heads): string {
+  return orientation === 'sphere' ? 'sphere' : `${orientation}, ${heads} heads`;
+}
+
+/** The wetted area of all vessels in the system's unit, in m² or ft², with a step for each. */
+export function vesselsArea(sheet: SheetBuilder, system: System): number {
+  const unit = SYSTEM_UNITS[system].L;
+  const fallback = system === 'SI' ? 7.6 : 25;
+  const fireHeight = length(sheet, 'fire_height', unit, { above: 0, fallback }, 'H_f');
+  let sum = 0;
+  for (let n = 1; n <= vesselCount(sheet); n += 1) sum += vesselSteps(sheet, n, fireHeight, system);
+  return sum;
+}

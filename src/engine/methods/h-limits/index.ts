@@ -1,0 +1,22 @@
+/* The public face of the limits of pressure. */
+export {
+  burstTolerance,
+  CODE_BASES,
+  type CodeBasis,
+  coldDifferentialTestPressure,
+  enBlowdown,
+  enOverpressure,
+  FLOORS,
+  LIMIT_CLASSES,
+  type LimitClass,
+  type LimitOptions,
+  limitTerms,
+  maap,
+  maxSetPressure,
+  relievingPressure,
+  reseatPressure,
+  type SetPlace,
+  setTolerance,
+  VALVE_TYPES,
+  type ValveType,
+} from './limits';

@@ -1,0 +1,2 @@
+/* The public face of the orifice letters. */
+export { areaOf, chooseLetter, type Orifice, ORIFICE_LETTERS, orificeByLetter } from './letters';

@@ -1,0 +1,208 @@
+/* Builds a sheet: reads inputs with refusals, keeps symbols, and makes equation and substitution from one template. */
+import { convert, dimensionOf, type Q, unitLabel } from '../quantity';
+import { texNumber } from './tex';
+import { type Inputs, type Refusal, type SheetWarning, type Step, type Worked } from './types';
+
+/** How an input is described to the builder: its name and what it means, for sentences. */
+export type Described = { name: string; meaning: string };
+
+/** Ends the work of one sheet; caught by `workSheet`, never seen outside. */
+class Refused extends Error {
+  constructor(readonly refusal: Refusal) {
+    super(refusal.text);
+  }
+}
+
+/** Where a template asks for a symbol: it gets TeX for the equation, and the number for the substitution. */
+export type Show = (key: string) => string;
+
+/** What a step needs beyond its equation. */
+export type StepInfo = {
+  key: string;
+  tex?: string;
+  meaning: string;
+  value: number;
+  unit: string;
+  clause?: string;
+  memory?: boolean;
+};
+
+/** Limits an input must keep, physically: beyond them the sheet refuses. */
+export type Bounds = { above?: number; min?: number; max?: number; fallback?: number };
+
+/** One sheet in the making. */
+export class SheetBuilder {
+  readonly steps: Step[] = [];
+  readonly warnings: SheetWarning[] = [];
+  readonly outputs: Inputs = {};
+  private readonly symbols = new Map<string, { tex: string; value: number }>();
+
+  constructor(
+    readonly inputs: Inputs,
+    private readonly described: readonly Described[],
+  ) {}
+
+  /** Stops the sheet with a sentence about one input. */
+  refuse(code: string, field: string, text: string): never {
+    throw new Refused({ code, field, text });
+  }
+
+  /** Adds a warning; `range` names the range that was left. */
+  warn(code: string, text: string, range?: string): void {
+    this.warnings.push(range === undefined ? { code, text } : { code, text, range });
+  }
+
+  /** Whether an input was given at all. */
+  has(name: string): boolean {
+    return this.inputs[name] !== undefined;
+  }
+
+  private meaning(name: string): string {
+    const [bare = name, index] = name.split(/_(?=\d+$)/);
+    const found = this.described.find((d) => d.name === name || d.name === bare);
+    const place = index === undefined ? '' : ` of vessel ${index}`;
+    return found ? `${found.meaning} (${name})${place}` : name;
+  }
+
+  /** The quantity given under a name, or a refusal that it is missing or not a number. */
+  quantity(name: string): Q {
+    const given = this.inputs[name];
+    if (given === undefined) this.refuse('INPUT_MISSING', name, `The ${this.meaning(name)} is missing.`);
+    if (typeof given === 'string' || typeof given === 'boolean')
+      this.refuse(
+        'NOT_A_NUMBER',
+        name,
+        `The ${this.meaning(name)} must be a number with a unit, not "${given}".`,
+      );
+    if (!Number.isFinite(given.value))
+      this.refuse('NOT_A_NUMBER', name, `The ${this.meaning(name)} is not a number.`);
+    return given;
+  }
+
+  /** Keeps a symbol for later equations, without a step. */
+  keep(key: string, value: number, tex: string = key): number {
+    this.symbols.set(key, { tex, value });
+    return value;
+  }
+
+  /** An input in `unit`, checked against bounds and kept as a symbol. `fallback` stands when it was not given. */
+  number(name: string, unit: string, bounds: Bounds = {}, tex?: string): number {
+    if (!this.has(name) && bounds.fallback !== undefined) return this.keep(name, bounds.fallback, tex);
+    const given = this.quantity(name);
+    const dimension = dimensionOf(given.unit);
+    if (dimension === undefined || dimension !== dimensionOf(unit))
+      this.refuse(
+        'WRONG_UNIT',
+        name,
+        `The ${this.meaning(name)} is given in ${unitLabel(given.unit) || 'no unit'}; it must be in a unit such as ${unitLabel(unit) || 'a plain number'}.`,
+      );
+    const value = convert(given, unit);
+    this.checkBounds(name, value, unit, bounds);
+    return this.keep(name, value, tex);
+  }
+
+  private checkBounds(name: string, value: number, unit: string, bounds: Bounds): void {
+    const shown = `${texNumber(value).replace(/\\,/g, '\u2009')} ${unitLabel(unit)}`.trim();
+    const limit = (n: number) => `${n} ${unitLabel(unit)}`.trim();
+    if (bounds.above !== undefined && !(value > bounds.above))
+      this.refuse(
+        'VALUE_IMPOSSIBLE',
+        name,
+        `The ${this.meaning(name)} is ${shown}; it must be above ${limit(bounds.above)}.`,
+      );
+    if (bounds.min !== undefined && value < bounds.min)
+      this.refuse(
+        'VALUE_IMPOSSIBLE',
+        name,
+        `The ${this.meaning(name)} is ${shown}; it cannot be below ${limit(bounds.min)}.`,
+      );
+    if (bounds.max !== undefined && value > bounds.max)
+      this.refuse(
+        'VALUE_IMPOSSIBLE',
+        name,
+        `The ${this.meaning(name)} is ${shown}; it cannot be above ${limit(bounds.max)}.`,
+      );
+  }
+
+  /** A word out of a list, or the fallback. */
+  word<T extends string>(name: string, words: readonly T[], fallback?: T): T {
+    const given = this.inputs[name];
+    if (given === undefined && fallback !== undefined) return fallback;
+    const found = words.find((w) => w === given);
+    if (found === undefined)
+      this.refuse('WORD_UNKNOWN', name, `The ${this.meaning(name)} must be one of: ${words.join(', ')}.`);
+    return found;
+  }
+
+  /** A yes or no, or the fallback. */
+  flag(name: string, fallback: boolean): boolean {
+    const given = this.inputs[name];
+    if (given === undefined) return fallback;
+    if (typeof given !== 'boolean')
+      this.refuse('NOT_A_FLAG', name, `The ${this.meaning(name)} must be yes or no.`);
+    return given;
+  }
+
+  /** Adds a step. The template is written once; symbols give the equation, numbers the substitution. */
+  step(info: StepInfo, template: (v: Show) => string): number {
+    const tex = info.tex ?? info.key;
+    const { value, unit, meaning, clause, memory } = info;
+    if (!Number.isFinite(value))
+      this.refuse('NO_RESULT', info.key, `The ${meaning} has no finite value with these inputs; check them.`);
+    const symbol: Show = (key) => this.symbols.get(key)?.tex ?? key;
+    const figure: Show = (key) => {
+      const known = this.symbols.get(key);
+      return known === undefined ? key : `{${texNumber(known.value)}}`;
+    };
+    this.steps.push({
+      symbol: tex,
+      meaning,
+      tex: `${tex} = ${template(symbol)}`,
+      worked: `${tex} = ${template(figure)}`,
+      value,
+      unit,
+      ...(clause === undefined ? {} : { clause }),
+      ...(memory === undefined ? {} : { memory }),
+    });
+    return this.keep(info.key, value, tex);
+  }
+
+  /** Adds a step whose result is a word (a regime, a letter). */
+  say(info: { symbol: string; meaning: string; value: string; tex: string; clause?: string }): void {
+    const { symbol, meaning, value, tex, clause } = info;
+    this.steps.push({
+      symbol,
+      meaning,
+      tex,
+      worked: tex,
+      value,
+      unit: '-',
+      ...(clause === undefined ? {} : { clause }),
+    });
+  }
+
+  /** Gives a named result. */
+  output(name: string, value: number | string | boolean, unit = '-'): void {
+    this.outputs[name] = typeof value === 'number' ? { value, unit } : value;
+  }
+}
+
+/** Works one sheet: runs the body, and turns a refusal into the sheet's `refused`. */
+export function workSheet(
+  method: { id: string; version: number; inputs: readonly Described[] },
+  inputs: Inputs,
+  edition: string | undefined,
+  body: (sheet: SheetBuilder) => void,
+): Worked {
+  const sheet = new SheetBuilder(inputs, method.inputs);
+  const { steps, outputs, warnings } = sheet;
+  const worked: Worked = { method: `${method.id}@${method.version}`, steps, outputs, warnings };
+  if (edition !== undefined) worked.edition = edition;
+  try {
+    body(sheet);
+  } catch (error) {
+    if (!(error instanceof Refused)) throw error;
+    worked.refused = error.refusal;
+  }
+  return worked;
+}
