@@ -149,12 +149,12 @@ function changed(document: unknown, op: Op): unknown {
 export function applyOne(document: unknown, op: Op): Result<unknown> {
   const fault = faultOf(document, op);
   const found = present(document, op) ?? null;
-  const moved = op.was !== undefined && !sameContent(op.was ?? null, found);
-  if (!fault && !moved) return ok(changed(document, op));
-  const sentence = moved
+  const stale = op.was !== undefined && !sameContent(op.was ?? null, found);
+  if (!fault && !stale) return ok(changed(document, op));
+  const sentence = stale
     ? `${describePath(document, op.path).label} has changed since you read it.`
     : (fault?.sentence ?? '');
-  const code = moved || fault?.stale ? 'STALE' : 'SCHEMA';
+  const code = stale || fault?.stale ? 'STALE' : 'SCHEMA';
   return fail(code, sentence, {
     errors: [{ path: op.path, code, sentence }],
     ...(code === 'STALE' ? { present: found } : {}),

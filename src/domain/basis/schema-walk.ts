@@ -96,3 +96,9 @@ export function expectedAt(
   const dimension = [...new Set(units.flatMap((unit) => dimensionOf(unit) ?? []))];
   return units[0] === undefined || dimension.length === 0 ? undefined : { dimension, unit: units[0] };
 }
+
+/** The parts of a document in the order in which it is read. */
+export function sectionsOf(document: unknown): string[] {
+  const schema = schemaOf(document);
+  return schema instanceof z.ZodObject ? Object.keys(schema.shape) : [];
+}
