@@ -12,10 +12,15 @@ import { VISCOSITY_FACTOR } from '../methods/c-liquid/viscosity';
 import { FIRE_INSULATION } from '../methods/e-fire/insulation';
 import { FIRE_WETTED } from '../methods/e-fire/wetted';
 import { BLOCKED_OUTLET } from '../methods/f-loads/blocked-outlet';
+import { CHECK_VALVE } from '../methods/f-loads/check-valve';
+import { CONTROL_VALVE_GAS, GAS_BLOWBY } from '../methods/f-loads/control-valve-gas';
+import { CONTROL_VALVE_LIQUID } from '../methods/f-loads/control-valve-liquid';
 import { THERMAL_EXPANSION } from '../methods/f-loads/thermal';
+import { TUBE_RUPTURE } from '../methods/f-loads/tube-rupture';
 import { VAPORISATION } from '../methods/f-loads/vaporisation';
 import { ACCUMULATION } from '../methods/h-limits/accumulation';
 import { SET_TOLERANCE } from '../methods/h-limits/tolerance';
+import { ISO_GAS, ISO_LIQUID, ISO_STEAM } from '../methods/i-iso4126/iso';
 import { LETTERS } from '../methods/i-letters/letter-method';
 import { type Method } from './types';
 
@@ -34,9 +39,17 @@ export const METHODS: readonly Method[] = [
   FIRE_INSULATION,
   FIRE_WETTED,
   BLOCKED_OUTLET,
+  CHECK_VALVE,
+  CONTROL_VALVE_GAS,
+  CONTROL_VALVE_LIQUID,
+  GAS_BLOWBY,
   THERMAL_EXPANSION,
+  TUBE_RUPTURE,
   VAPORISATION,
   ACCUMULATION,
   SET_TOLERANCE,
   LETTERS,
+  ISO_GAS,
+  ISO_STEAM,
+  ISO_LIQUID,
 ];

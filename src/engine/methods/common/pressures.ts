@@ -3,15 +3,20 @@ import { dimensionOf, type Q, unitLabel } from '../../quantity';
 import { type SheetBuilder } from '../../sheet';
 import { SYSTEM_UNITS, type System } from './system';
 
-const STANDARD: Record<System, number> = { SI: 101.325, US: 14.7 };
+/** The standard atmosphere as the conventions of the reference cases fix it. */
+const STANDARD: Record<string, number> = { kPa_abs: 101.325, bar_abs: 1.01325, psia: 14.7 };
 
 /** The barometric pressure in the system's absolute unit; the standard atmosphere, with a warning, when not given. */
 export function barometer(sheet: SheetBuilder, system: System): number {
-  const { P } = SYSTEM_UNITS[system];
+  return barometerIn(sheet, SYSTEM_UNITS[system].P);
+}
+
+/** The same in kPa_abs, bar_abs or psia. */
+export function barometerIn(sheet: SheetBuilder, unit: string): number {
   if (sheet.has('atmospheric_pressure'))
-    return sheet.number('atmospheric_pressure', P, { above: 0 }, 'p_{atm}');
-  const assumed = STANDARD[system];
-  const text = `No barometric pressure was given; ${assumed} ${unitLabel(P)} is used. A site above sea level has less.`;
+    return sheet.number('atmospheric_pressure', unit, { above: 0 }, 'p_{atm}');
+  const assumed = STANDARD[unit] ?? 101.325;
+  const text = `No barometric pressure was given; ${assumed} ${unitLabel(unit)} is used. A site above sea level has less.`;
   if (!sheet.warnings.some((w) => w.code === 'BAROMETER_ASSUMED')) sheet.warn('BAROMETER_ASSUMED', text);
   return sheet.keep('atmospheric_pressure', assumed, 'p_{atm}');
 }
@@ -25,19 +30,22 @@ function marked(tex: string, mark: string): string {
   return tex.replace(/_(\w)$/, '_{$1}').replace(/\}$/, `,${mark}}`);
 }
 
-/** An absolute pressure, given as absolute or as gauge (then the conversion is a step of the sheet). */
+/** An absolute pressure in the system's unit, given as absolute or as gauge (then the conversion is a step). */
 export function absolutePressure(sheet: SheetBuilder, name: string, tex: string, system: System): number {
-  const { P, Pg } = SYSTEM_UNITS[system];
-  const given = sheet.quantity(name);
-  if (!isGauge(given)) return sheet.number(name, P, { above: 0 }, tex);
-  const atmosphere = barometer(sheet, system);
-  const gauge = sheet.number(name, Pg, {}, tex);
+  return absoluteIn(sheet, name, tex, SYSTEM_UNITS[system].P);
+}
+
+/** The same in any absolute unit that has a gauge twin (kPa_abs, bar_abs, psia). */
+export function absoluteIn(sheet: SheetBuilder, name: string, tex: string, unit: string): number {
+  if (!isGauge(sheet.quantity(name))) return sheet.number(name, unit, { above: 0 }, tex);
+  const atmosphere = barometerIn(sheet, unit);
+  const gauge = sheet.number(name, unit === 'psia' ? 'psig' : unit.replace('_abs', '_g'), {}, tex);
   const value = gauge + atmosphere;
   if (value <= 0)
     sheet.refuse('VALUE_IMPOSSIBLE', name, `${name} is below absolute vacuum at this barometric pressure.`);
   sheet.keep(`${name} gauge`, gauge, marked(tex, 'g'));
   return sheet.step(
-    { key: name, tex, meaning: 'as an absolute pressure', value, unit: P },
+    { key: name, tex, meaning: 'as an absolute pressure', value, unit },
     (v) => `${v(`${name} gauge`)} + ${v('atmospheric_pressure')}`,
   );
 }
