@@ -1,7 +1,8 @@
 /* Every request passes here: request id, origin check, deny by default, errors told as problems, security headers, one log line. */
 import { type APIContext, type MiddlewareNext } from 'astro';
 import { defineMiddleware } from 'astro:middleware';
-import { currentPerson } from './http/person';
+import { whoAsks } from '@auth/index';
+import { nobodyYet } from '@data/people';
 import { isPublic } from './http/access';
 import { refuse } from './http/answer';
 import { readSent } from './http/body';
@@ -24,17 +25,19 @@ async function prepare(context: APIContext, runtime: Runtime): Promise<void> {
   const { locals } = context;
   locals.requestId = newRequestId();
   locals.db = runtime.db;
+  locals.auth = runtime.auth;
   locals.config = runtime.config;
   locals.clock = runtime.clock;
   locals.catcher = runtime.catcher;
   locals.version = runtime.version;
   locals.log = runtime.log.child({ id: locals.requestId });
-  locals.who = await currentPerson(context, runtime);
+  locals.who = (await whoAsks(runtime.auth, context.request.headers.get('cookie'))) ?? undefined;
 }
 
 /** A visitor who is not signed in: programs are told, a form keeps what was typed, a page goes to the sign-in and comes back. */
 async function deny(context: APIContext): Promise<Response> {
   if (!isApi(context)) {
+    if (await nobodyYet(context.locals.db)) return context.redirect('/first-coordinator', 303);
     const next = isUnsafe(context.request.method) ? '/' : `${context.url.pathname}${context.url.search}`;
     return context.redirect(next === '/' ? '/sign-in' : `/sign-in?next=${encodeURIComponent(next)}`, 303);
   }
@@ -72,7 +75,7 @@ function logRequest(context: APIContext, status: number, started: number): void 
   const path = /secret|token/.test(routePattern) ? routePattern : url.pathname;
   const ms = Math.round((performance.now() - started) * 10) / 10;
   const level = status >= 500 ? 'error' : routePattern === '/health' ? 'debug' : 'info';
-  locals.log[level]({ method: request.method, path, status, ms, person: locals.who?.id }, 'request');
+  locals.log[level]({ method: request.method, path, status, ms, person: locals.who?.person.id }, 'request');
 }
 
 async function served(context: APIContext, next: MiddlewareNext, runtime: Runtime): Promise<Response> {
@@ -92,6 +95,8 @@ export const onRequest = defineMiddleware(async (context, next) => {
   if (!import.meta.env.DEV) secureHeaders(response.headers, runtime.config.secure);
   response.headers.set('X-Request-Id', context.locals.requestId);
   response.headers.delete('X-Astro-Rewrite');
+  const renewed = context.locals.who?.renewed;
+  if (renewed && !response.headers.has('Set-Cookie')) response.headers.append('Set-Cookie', renewed);
   logRequest(context, response.status, started);
   return response;
 });

@@ -1,6 +1,8 @@
 /* What a running server holds open: settings, database, log, clock, mail catcher and outbox worker; opened once, closed once. */
 import { join } from 'node:path';
+import { type Auth, openAuth, sweepSessions } from '@auth/index';
 import { migrate, openDatabase, type Db } from '@data/connection';
+import { sweepAnswers } from '@data/idempotency';
 import { databaseOutbox, makeMailer, startCatcher, startWorker, type Catcher } from '@notices/index';
 import { version } from '../package.json';
 import { readConfig, type Config } from './config';
@@ -11,6 +13,7 @@ export type Clock = () => Date;
 export type Runtime = {
   config: Config & { baseUrl: string };
   db: Db;
+  auth: Auth;
   log: Log;
   clock: Clock;
   catcher: Catcher | undefined;
@@ -32,6 +35,24 @@ function addressOf(host: string, port: number): string {
   return `http://${name.includes(':') ? `[${name}]` : name}:${port}`;
 }
 
+const HOUR = 3_600_000;
+
+/** Forgets sessions that ended and answers kept for repeated requests, now and every six hours. */
+function keepSwept(db: Db, log: Log): NodeJS.Timeout {
+  const sweep = async () => {
+    const now = clock().getTime();
+    await sweepSessions(db, new Date(now).toISOString());
+    await sweepAnswers(db, new Date(now - 48 * HOUR).toISOString());
+  };
+  const swept = () => {
+    sweep().catch((error: unknown) => {
+      log.error({ err: error }, 'sweeping failed');
+    });
+  };
+  swept();
+  return setInterval(swept, 6 * HOUR).unref();
+}
+
 async function open(config: Config, port: number): Promise<Runtime> {
   const log = makeLog(config.logLevel);
   const db = openDatabase(config.databaseFile);
@@ -41,15 +62,18 @@ async function open(config: Config, port: number): Promise<Runtime> {
     : await startCatcher(config.catcherPort, join(config.dataDir, 'mails.jsonl'), clock);
   const mailer = makeMailer(config.smtpUrl ?? catcher?.url ?? '', config.mailFrom);
   const baseUrl = config.baseUrl ?? addressOf(config.host, port);
+  const sweeper = keepSwept(db, log);
   const worker = startWorker(databaseOutbox(db, baseUrl), mailer, clock, log);
   return {
     config: { ...config, baseUrl },
     db,
+    auth: openAuth(db, { secure: config.secure }),
     log,
     clock,
     catcher,
     version,
     async close() {
+      clearInterval(sweeper);
       await worker.stop();
       await catcher?.close();
       await db.destroy();

@@ -1,13 +1,14 @@
 /* Makes once what several test workers share: the build, and the seeded database that each copies. */
 import { spawn } from 'node:child_process';
 import { existsSync, readdirSync, statSync } from 'node:fs';
-import { mkdir, rm, stat } from 'node:fs/promises';
+import { cp, mkdir, rm, stat } from 'node:fs/promises';
 import { dirname, join } from 'node:path';
 import { fileURLToPath } from 'node:url';
 
 const ROOT = dirname(dirname(dirname(fileURLToPath(import.meta.url))));
 const SHARED = join(ROOT, 'test-results', 'shared');
 const STALE_LOCK = 10 * 60_000;
+const STALE_COPY = 30 * 60_000;
 
 /** Runs `make` in one worker at a time; a folder is the lock, and one left by a worker that died is broken after ten minutes. */
 async function alone<T>(name: string, make: () => Promise<T>): Promise<T> {
@@ -33,8 +34,11 @@ async function alone<T>(name: string, make: () => Promise<T>): Promise<T> {
   }
 }
 
+/** What Vitest sets in the environment; a build would take DEV and the rest for its own mode. */
+const OF_VITEST = /^(VITEST.*|NODE_OPTIONS|NODE_ENV|TEST|DEV|PROD|SSR|MODE|BASE_URL)$/;
+
 function runNode(args: string[], env: Record<string, string> = {}): Promise<void> {
-  const { NODE_OPTIONS: _, VITEST: __, ...rest } = process.env;
+  const rest = Object.fromEntries(Object.entries(process.env).filter(([name]) => !OF_VITEST.test(name)));
   return new Promise((resolve, reject) => {
     const child = spawn(process.execPath, args, {
       cwd: ROOT,
@@ -51,9 +55,27 @@ function runNode(args: string[], env: Record<string, string> = {}): Promise<void
   });
 }
 
-/** Builds the server when the sources are newer than the build. */
-export async function ensureBuilt(): Promise<void> {
-  await alone('build', () => runNode(['scripts/build.mjs', '--if-stale']));
+let built: Promise<string> | undefined;
+
+/**
+ * Builds the server when the sources are newer than the build, and answers the entry of a copy: a server that loads its pages one by one
+ * must not have them replaced by the next build. Once a worker.
+ */
+export function ensureBuilt(): Promise<string> {
+  built ??= alone('build', async () => {
+    await runNode(['scripts/build.mjs', '--if-stale']);
+    const at = Math.floor(statSync(join(ROOT, 'dist/built-at')).mtimeMs);
+    const copy = join(SHARED, `dist-${at}`);
+    if (!existsSync(copy)) {
+      const old = readdirSync(SHARED).filter(
+        (name) => /^dist-\d+$/.test(name) && at - Number(name.slice(5)) > STALE_COPY,
+      );
+      for (const name of old) await rm(join(SHARED, name), { recursive: true, force: true });
+      await cp(join(ROOT, 'dist'), copy, { recursive: true });
+    }
+    return join(copy, 'server/entry.mjs');
+  });
+  return built;
 }
 
 function newest(path: string): number {
@@ -63,7 +85,7 @@ function newest(path: string): number {
   return Math.max(found.mtimeMs, ...readdirSync(path).map((name) => newest(join(path, name))));
 }
 
-/** The file of a seeded database to copy; made again when seeds, migrations, domain or engine are newer. */
+/** The file of a seeded database to copy; made again when seeds, migrations, domain or engine are newer, and each day: its dates move with the day. */
 export async function ensureTemplate(kind: 'demo' | 'large'): Promise<string> {
   return alone(`seed-${kind}`, async () => {
     const folder = join(SHARED, kind);
@@ -78,7 +100,8 @@ export async function ensureTemplate(kind: 'demo' | 'large'): Promise<string> {
       'scripts/seed.ts',
     ];
     const made = existsSync(file) ? statSync(file).mtimeMs : 0;
-    if (made > Math.max(...from.map((name) => newest(join(ROOT, name))))) return file;
+    const sameDay = new Date(made).toDateString() === new Date().toDateString();
+    if (sameDay && made > Math.max(...from.map((name) => newest(join(ROOT, name))))) return file;
     await rm(folder, { recursive: true, force: true });
     const flags = kind === 'large' ? ['--large'] : [];
     await runNode(['--import', 'tsx', 'scripts/seed.ts', ...flags], { SETWRIGHT_DATA_DIR: folder });

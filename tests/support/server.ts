@@ -41,9 +41,12 @@ function cleanEnv(own: Record<string, string>): Record<string, string | undefine
   return { ...Object.fromEntries(inherited), NODE_ENV: 'production', ...own };
 }
 
-/** Starts `dist/server/entry.mjs` and collects its output. */
-export function spawnServer(env: Record<string, string>): { child: ChildProcess; output: () => string } {
-  const child = spawn(process.execPath, [join(ROOT, 'dist/server/entry.mjs')], {
+/** Starts a built server's entry and collects its output. */
+export function spawnServer(
+  entry: string,
+  env: Record<string, string>,
+): { child: ChildProcess; output: () => string } {
+  const child = spawn(process.execPath, [entry], {
     cwd: ROOT,
     env: cleanEnv(env),
     stdio: ['ignore', 'pipe', 'pipe'],
@@ -81,11 +84,11 @@ async function addressOf(child: ChildProcess, output: () => string): Promise<str
 
 /** Starts a server that answers; builds and seeds first where that is missing. */
 export async function startServer({ data = 'demo', env = {} }: ServerOptions = {}): Promise<TestServer> {
-  await ensureBuilt();
+  const entry = await ensureBuilt();
   const dataDir = await mkdtemp(join(tmpdir(), 'setwright-test-'));
   if (data !== 'empty') await cp(await ensureTemplate(data), join(dataDir, 'setwright.db'));
   const demo = data === 'empty' ? 'off' : 'on';
-  const { child, output } = spawnServer({
+  const { child, output } = spawnServer(entry, {
     PORT: '0',
     SETWRIGHT_DATA_DIR: dataDir,
     SETWRIGHT_DEMO: demo,
