@@ -1,0 +1,87 @@
+/* Inputs that need not be entered: taken from the limit sheet, the load sheet, the fluid, the group and its relief points. */
+import { type Fluid, type Path, getAt, isFigure, quantityOf } from '@domain/basis';
+import { methodById } from '@engine/catalog';
+import { type Found, type Resolved } from './inputs';
+import { type Made, outputOf } from './sheets';
+import { type CredibleAnswer, type Work } from './work';
+
+/** Value and origin of an input by its name in the method; worked only when the method asks for it. */
+export type Values = Record<string, () => Found | undefined>;
+
+/** Adds what is known to the entered inputs, for the inputs that the method names and nobody entered. */
+export function fillImplicit(method: string, resolved: Resolved, values: Values): Made {
+  const made: Made = { inputs: { ...resolved.inputs }, from: { ...resolved.from } };
+  const missing = new Set(resolved.missing.map((item) => item.name));
+  for (const input of methodById(method)?.inputs ?? []) {
+    if (input.name in made.inputs || missing.has(input.name)) continue;
+    const found = values[input.name]?.();
+    if (!found) continue;
+    made.inputs[input.name] = found.value;
+    made.from[input.name] = found.path;
+  }
+  return made;
+}
+
+/** The fluid of an answer. */
+export function fluidOf(work: Work, ca: CredibleAnswer): Fluid | undefined {
+  return ca.answer.fluid === undefined ? undefined : work.lookup.fluids.get(ca.answer.fluid);
+}
+
+function figureOf(work: Work, path: Path): Found | undefined {
+  const found = getAt(work.basis, path);
+  if (typeof found === 'string' || typeof found === 'boolean') return { value: found, path };
+  const q = isFigure(found) ? quantityOf(found) : undefined;
+  return q && { value: q, path };
+}
+
+/** The properties of a fluid by the names that methods use. */
+export function fluidValues(work: Work, fluid: Fluid | undefined): Values {
+  if (!fluid) return {};
+  const at = (field: keyof Fluid) => () => figureOf(work, `fluids/${fluid.id}/${field}`);
+  const liquid = fluid.phase === 'liquid' || fluid.phase === 'flashing-liquid';
+  return {
+    T: at('T'),
+    T0: at('T'),
+    M: at('M'),
+    Z: at('Z'),
+    k: at('k'),
+    n: at('n'),
+    latent_heat: at('latentHeat'),
+    cp: at('cpLiquid'),
+    expansion_coefficient: at('expansion'),
+    rho: at(liquid ? 'rhoLiquid' : 'rhoVapour'),
+    rho0: at('rhoLiquid'),
+    mu: at(liquid ? 'muLiquid' : 'muVapour'),
+    v0: at('v0'),
+    v9: at('v9'),
+    G: at('relativeDensity'),
+  };
+}
+
+/** What a limit sheet found, under the names that methods use. */
+export function limitValues(work: Work, ca: CredibleAnswer): Values {
+  const key = `limit:${ca.id}`;
+  const output = (name: string) => (): Found | undefined => {
+    const q = outputOf(work.sheets[key], name);
+    return q && { value: q, path: `sheets/${key}#${name}` };
+  };
+  return {
+    set_pressure: output('set_pressure'),
+    overpressure: output('overpressure'),
+    atmospheric_pressure: () => ({ value: work.context.barometer, path: 'site/barometer' }),
+    MAWP: output('MAWP'),
+    relieving_pressure: output('P1'),
+  };
+}
+
+/** Inputs of load methods: fluid, limits, and the relieving pressure as the low side of what flows in. */
+export function loadValues(work: Work, ca: CredibleAnswer, resolved: Resolved): Values {
+  const fluid = fluidOf(work, ca);
+  const p1 = () => {
+    const q = outputOf(work.sheets[`limit:${ca.id}`], 'P1');
+    return q && { value: q, path: `sheets/limit:${ca.id}#P1` };
+  };
+  const sink: Values =
+    'UA' in resolved.inputs && fluid ? { T_sink: () => figureOf(work, `fluids/${fluid.id}/T`) } : {};
+  return { ...fluidValues(work, fluid), ...limitValues(work, ca), ...sink, P2: p1, P_low: p1 };
+}

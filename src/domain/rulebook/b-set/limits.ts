@@ -1,0 +1,284 @@
+/* Rules on set pressures against the MAWP and against each other. */
+import { quantityOf, type Group, type ReliefPoint } from '@domain/basis';
+import { effectiveArea } from '@domain/evaluate';
+import { toSI } from '@engine/quantity';
+import {
+  answersOf,
+  answersOfPoint,
+  gt,
+  groupsOf,
+  isFire,
+  limitOf,
+  onGroup,
+  onPoint,
+  output,
+  param,
+  percent,
+  type SetMember,
+  setMembers,
+} from '../reading';
+import { type Hit, rule, type RuleContext } from '../types';
+
+/** True for a device whose every credible scenario is thermal expansion of shut-in piping: B31.3 sets its own limit. */
+export function thermalPipingOnly(ctx: RuleContext, point: ReliefPoint): boolean {
+  const answers = answersOfPoint(ctx, point);
+  if (answers.length === 0 || answers.some((ca) => ca.scenario.key !== 'thermal-expansion')) return false;
+  return groupsOf(ctx, point).every(
+    (group) => ctx.lookup.equipment.get(group.limiting.equipment)?.kind === 'piping',
+  );
+}
+
+function isTank(ctx: RuleContext, group: Group): boolean {
+  return ctx.lookup.equipment.get(group.limiting.equipment)?.kind === 'storage-tank';
+}
+
+export const setAboveMawp = rule(
+  {
+    code: 'set-above-mawp',
+    subject: 'device',
+    statement: '{device} is set at {set}, above the MAWP of {equipment} ({mawp}).',
+    condition:
+      'first.set > mawp·1.001 (pressure); ASME, EN and B31.3 alike; for storage tanks use tank-vent-set-high',
+    severity: 'stop',
+    gate: 'scenarios',
+    source: 'ASME VIII-1 UG-134(a) [S]; EN ISO 4126-9 / EN 764-7: set ≤ PS [M]',
+  },
+  (ctx) =>
+    ctx.doc.groups.flatMap((group): Hit[] => {
+      const limit = limitOf(ctx, group.limiting);
+      const first = setMembers(ctx, group).find((member) => !member.fireOnly);
+      if (
+        !limit ||
+        !first ||
+        isTank(ctx, group) ||
+        thermalPipingOnly(ctx, first.point) ||
+        !gt(first.pa, limit.pa)
+      )
+        return [];
+      const values = { set: first.set, equipment: limit.equipment.tag, mawp: limit.mawp };
+      return [
+        onPoint(first.point, values, {
+          worse: first.pa / limit.pa,
+          field: `reliefPoints/${first.point.id}/set`,
+        }),
+      ];
+    }),
+);
+
+/** The devices of a group after the first, with its limit. */
+function furtherOf(
+  ctx: RuleContext,
+  group: Group,
+): { limit: NonNullable<ReturnType<typeof limitOf>>; members: SetMember[] } | undefined {
+  const limit = limitOf(ctx, group.limiting);
+  return limit && !isTank(ctx, group) ? { limit, members: setMembers(ctx, group).slice(1) } : undefined;
+}
+
+export const setAdditionalAbove105 = rule(
+  {
+    code: 'set-additional-above-105',
+    subject: 'group',
+    statement: '{device} is an additional device set at {set}, above 105 % of MAWP.',
+    condition:
+      'any further device that answers a non-fire scenario: set > 1.05·mawp; EN: set > 1.05·PS or its pressure at full lift > 1.10·PS',
+    severity: 'stop',
+    gate: 'scenarios',
+    source: 'ASME VIII-1 UG-134(a) [S]; EN 764-7 [M]',
+  },
+  (ctx) =>
+    ctx.doc.groups.flatMap((group) => {
+      const further = furtherOf(ctx, group);
+      if (!further || !answersOf(ctx, group).some((ca) => !isFire(ca))) return [];
+      const { limit } = further;
+      return further.members
+        .filter((member) => !member.fireOnly)
+        .filter(
+          (member) => gt(member.pa, 1.05 * limit.pa) || (limit.en && gt(fullLiftPa(member), 1.1 * limit.pa)),
+        )
+        .map((member) => {
+          const values = { device: member.point.tag, set: member.set, mawp: limit.mawp };
+          return onGroup(ctx, group, values, {
+            worse: member.pa / limit.pa,
+            field: `reliefPoints/${member.point.id}/set`,
+          });
+        });
+    }),
+);
+
+function fullLiftPa(member: SetMember): number {
+  const over = quantityOf(member.point.overpressure);
+  return member.pa * (1 + (over ? toSI(over) : 0.1));
+}
+
+export const setFireSupplement = rule(
+  {
+    code: 'set-fire-supplement',
+    subject: 'group',
+    statement:
+      '{device} is set above 105 % of MAWP, which is allowed only for a supplementary fire device, up to 110 %.',
+    condition:
+      'device that answers fire only: set > 1.05·mawp and not marked supplementaryFire, or set > 1.10·mawp, or basis = EN (one that also answers a process scenario falls under set-additional-above-105)',
+    severity: 'stop',
+    gate: 'scenarios',
+    source: 'ASME VIII-1 UG-134(b) [M]; EN: not available [M]',
+  },
+  (ctx) =>
+    ctx.doc.groups.flatMap((group) => {
+      const limit = limitOf(ctx, group.limiting);
+      if (!limit || isTank(ctx, group)) return [];
+      return setMembers(ctx, group)
+        .filter((member) => member.fireOnly || fireAlone(ctx, member.point))
+        .filter((member) => gt(member.pa, 1.05 * limit.pa))
+        .filter((member) => !member.fireOnly || limit.en || gt(member.pa, 1.1 * limit.pa))
+        .map((member) => {
+          const values = { device: member.point.tag, set: member.set, mawp: limit.mawp };
+          return onGroup(ctx, group, values, {
+            worse: member.pa / limit.pa,
+            field: `reliefPoints/${member.point.id}/set`,
+          });
+        });
+    }),
+);
+
+function fireAlone(ctx: RuleContext, point: ReliefPoint): boolean {
+  const answers = answersOfPoint(ctx, point);
+  return answers.length > 0 && answers.every(isFire);
+}
+
+export const setsNotStaggered = rule(
+  {
+    code: 'sets-not-staggered',
+    subject: 'group',
+    statement: 'The {n} devices of {group} all open together, which favours chatter at small loads.',
+    condition:
+      'n ≥ 2 pop-action devices in service, max(set)/min(set) − 1 < 0.01, and the smallest credible load < 0.5 × Σ rated',
+    severity: 'note',
+    gate: 'check',
+    source: 'trade practice; [P]',
+    parameter: 'staggerSpread',
+  },
+  (ctx) =>
+    ctx.doc.groups.flatMap((group): Hit[] => {
+      const pops = setMembers(ctx, group).filter((member) => member.point.axes.action === 'pop');
+      const [low, high] = [pops[0], pops.at(-1)];
+      if (pops.length < 2 || !low || !high || high.pa / low.pa - 1 >= param(ctx, 'staggerSpread', 0.01))
+        return [];
+      const loads = answersOf(ctx, group).flatMap((ca) => output(ctx, `load:${ca.id}`, 'relief_load') ?? []);
+      const rated = pops.flatMap((member) => ctx.evaluation.points[member.point.id]?.rated ?? []);
+      if (loads.length === 0 || rated.length < pops.length) return [];
+      const least = Math.min(...loads.map((q) => toSI(q)));
+      const all = rated.reduce((sum, q) => sum + toSI(q), 0);
+      return least < 0.5 * all
+        ? [onGroup(ctx, group, { n: String(pops.length), x: percent(least / all) })]
+        : [];
+    }),
+);
+
+export const thermalReliefSetHigh = rule(
+  {
+    code: 'thermal-relief-set-high',
+    subject: 'device',
+    statement:
+      '{device} protects only blocked-in piping and is set above the lesser of the test pressure and 120 % of design.',
+    condition:
+      'all scenarios of the device = thermal-expansion, equipment kind piping: set > min(p_test, 1.20·p_design)',
+    severity: 'stop',
+    gate: 'scenarios',
+    source: "ASME B31.3-2016 322.6.3(b)(2) [S]; needs owner's approval for set above VIII-1 limits",
+    parameter: 'thermalSetMax',
+  },
+  (ctx) =>
+    ctx.doc.groups.flatMap((group) => {
+      const limit = limitOf(ctx, group.limiting);
+      if (!limit) return [];
+      const test = quantityOf(limit.side.pipingTest) ?? quantityOf(limit.side.test);
+      const byDesign = param(ctx, 'thermalSetMax', 1.2) * limit.pa;
+      const most = test ? Math.min(toSI(test), byDesign) : byDesign;
+      return setMembers(ctx, group)
+        .filter((member) => thermalPipingOnly(ctx, member.point) && gt(member.pa, most))
+        .map((member) =>
+          onPoint(member.point, { set: member.set, mawp: limit.mawp }, { worse: member.pa / most }),
+        );
+    }),
+);
+
+const TANK_FACTORS: Record<string, [number, number]> = { 'api-620': [1.1, 1.2] };
+
+export const tankVentSetHigh = rule(
+  {
+    code: 'tank-vent-set-high',
+    subject: 'device',
+    statement: '{device} needs {pf} to pass its flow, beyond the design pressure or vacuum of {tank}.',
+    condition:
+      'pressure: p_at_required_flow > p_design (emergency: > 1.00·p_design API 650, > 1.20·p_design API 620 fire, > 1.10 non-fire); vacuum: abs(p_at_required_flow) > designVacuum; also emergency vent opening ≤ normal vent opening',
+    severity: 'stop',
+    gate: 'scenarios',
+    source: 'API 2000 5th (49 CFR 195.264 reprint) [S]; API 650/620 allowances [M]',
+  },
+  (ctx) =>
+    ctx.answers.flatMap((ca): Hit[] => {
+      const limit = ca.group && limitOf(ctx, ca.group.limiting);
+      if (!ca.group || !limit || limit.equipment.kind !== 'storage-tank') return [];
+      const [process, fire] = TANK_FACTORS[limit.side.code?.basis ?? ''] ?? [1, 1];
+      const vacuum = ca.answer.accumulation === 'tank-vacuum';
+      const design = vacuum ? quantityOf(limit.side.designVacuum) : limit.mawp;
+      if (!design) return [];
+      const most =
+        Math.abs(toSI(design)) * (vacuum ? 1 : ca.scenario.key.startsWith('fire') ? fire : process);
+      return ca.group.members.flatMap((member) => {
+        const point = ctx.lookup.points.get(member.point);
+        const flow = quantityOf(vacuum ? point?.fullFlowVacuum : point?.fullFlow);
+        if (!point || !flow || !member.credited || !gt(Math.abs(toSI(flow)), most)) return [];
+        return [
+          onPoint(
+            point,
+            { pf: flow, tank: limit.equipment.tag, limit: design },
+            { worse: Math.abs(toSI(flow)) / most },
+          ),
+        ];
+      });
+    }),
+);
+
+const RESET_WIDE = 0.1;
+const NARROW_ABOVE = 1720e3;
+
+export const setOutsideSpringRange = rule(
+  {
+    code: 'set-outside-spring-range',
+    subject: 'device',
+    statement: '{set} lies outside the range of the fitted spring ({lo}–{hi}).',
+    condition:
+      'CDTP (else set) outside nameplate spring range; if the range is unknown and a reset is proposed: change from stamped set > ±10 % (> ±5 % above 250 psi/1 720 kPa)',
+    severity: 'stop',
+    gate: 'scenarios',
+    source:
+      "46 CFR 162.018-4(f): springs not reset beyond ±10 % [S]; maker's spring chart governs; ±5 % above 250 psi [M]",
+    parameter: 'resetBand',
+  },
+  (ctx) =>
+    ctx.doc.reliefPoints.flatMap((point): Hit[] => {
+      const set = quantityOf(point.cdtp) ?? quantityOf(point.set);
+      const [lo, hi] = [quantityOf(point.spring?.lo), quantityOf(point.spring?.hi)];
+      if (!set) return [];
+      if (lo && hi) {
+        const outside = gt(toSI(set), toSI(hi)) || gt(toSI(lo), toSI(set));
+        return outside ? [onPoint(point, { set, lo, hi }, { field: `reliefPoints/${point.id}/set` })] : [];
+      }
+      const old = quantityOf(ctx.prior?.doc.reliefPoints.find((item) => item.id === point.id)?.set);
+      const now = quantityOf(point.set);
+      if (!old || !now || effectiveArea(point) === undefined || point.axes.holds !== 'spring') return [];
+      const band = toSI(old) > NARROW_ABOVE ? RESET_WIDE / 2 : param(ctx, 'resetBand', RESET_WIDE);
+      if (Math.abs(toSI(now) / toSI(old) - 1) <= band * 1.001) return [];
+      const values = {
+        set: now,
+        lo: { value: old.value * (1 - band), unit: old.unit },
+        hi: { value: old.value * (1 + band), unit: old.unit },
+      };
+      return [
+        onPoint(point, values, {
+          more: 'The spring range is not known, so the band about the stamped set stands for it.',
+        }),
+      ];
+    }),
+);

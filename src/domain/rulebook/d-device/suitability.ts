@@ -1,0 +1,255 @@
+/* Rules on whether a kind of device suits the state and the service that it relieves. */
+import { type Fluid, type ReliefPoint, quantityOf } from '@domain/basis';
+import { type CredibleAnswer, outletOf } from '@domain/evaluate';
+import { toSI } from '@engine/quantity';
+import { answersOfPoint, gaugePa, onPoint, scenarioName } from '../reading';
+import { type Hit, rule, type RuleContext, type Severity } from '../types';
+
+function fluidOf(ctx: RuleContext, ca: CredibleAnswer): Fluid | undefined {
+  return ctx.lookup.fluids.get(ca.answer.fluid ?? '');
+}
+
+type Misfit = { state: string; severity?: Severity; more?: string };
+
+/** What a device is certified for that does not suit the state of an answer; nothing when it suits. */
+function misfit(point: ReliefPoint, fluid: Fluid, ca: CredibleAnswer): Misfit | undefined {
+  const certified = new Set(point.axes.certifiedFor);
+  const liquid = certified.has('liquid');
+  const compressible = certified.has('gas') || certified.has('steam');
+  const nonCertified = ca.answer.size.by === 'method' && ca.answer.size.method === 'c.liquid-noncertified';
+  if (fluid.phase === 'liquid' && !liquid && !nonCertified) return { state: 'liquid' };
+  if ((fluid.phase === 'gas' || fluid.phase === 'vapour') && !compressible) return { state: fluid.phase };
+  const mixed = fluid.phase === 'two-phase' || fluid.phase === 'flashing-liquid';
+  if (!mixed || (liquid && compressible)) return undefined;
+  return { state: fluid.phase.replace('-', ' '), severity: 'justify', more: 'State why it stays stable.' };
+}
+
+export const trimDoesNotSuitState = rule(
+  {
+    code: 'trim-does-not-suit-state',
+    subject: 'device',
+    statement: '{device} is certified for {cert} but {scenario} relieves {state}.',
+    condition:
+      '(a) liquid or liquid-first scenario and certified state lacks liquid and the sheet is not the non-certified liquid method (25 % overpressure, Kp); (b) gas/steam scenario and certified state lacks gas/steam; (c) device called safety valve (pop, compressible) on liquid; (d) two-phase or liquid→vapour and certified state not both: state why it is stable',
+    severity: 'stop',
+    gate: 'scenarios',
+    source: 'ASME VIII-1 UG-125(f): liquid-full vessels need devices for liquid [S]; API 520-1 [M]',
+  },
+  (ctx) =>
+    ctx.doc.reliefPoints
+      .filter((point) => point.axes.recloses === 'yes' && point.axes.certifiedFor.length > 0)
+      .flatMap((point) =>
+        answersOfPoint(ctx, point).flatMap((ca): Hit[] => {
+          const fluid = fluidOf(ctx, ca);
+          const wrong = fluid && misfit(point, fluid, ca);
+          if (!wrong) return [];
+          const { state, ...extra } = wrong;
+          const values = {
+            cert: point.axes.certifiedFor.join(' and '),
+            scenario: scenarioName(ca.scenario),
+            state,
+          };
+          return [onPoint(point, values, { ...extra, field: `reliefPoints/${point.id}/axes/certifiedFor` })];
+        }),
+      ),
+);
+
+/** The first hazardous fluid that a device relieves. */
+function hazardous(ctx: RuleContext, point: ReliefPoint): Fluid | undefined {
+  return answersOfPoint(ctx, point)
+    .flatMap((ca) => fluidOf(ctx, ca) ?? [])
+    .find((fluid) => fluid.hazards?.toxic === true || fluid.hazards?.flammable === true);
+}
+
+export const openBonnetUnfit = rule(
+  {
+    code: 'open-bonnet-unfit',
+    subject: 'device',
+    statement: '{device} has an open bonnet or plain lever and can release {fluid} at the valve.',
+    condition:
+      'open bonnet/yoke or unpacked lever and (toxic or flammable fluid, or outlet to a closed system with superimposed pressure > 0)',
+    severity: 'stop',
+    gate: 'scenarios',
+    source: 'API 520-1 [M]',
+  },
+  (ctx) =>
+    ctx.doc.reliefPoints.flatMap((point): Hit[] => {
+      if (point.bonnet?.kind !== 'open' && point.bonnet?.lever !== 'plain') return [];
+      const fluid = hazardous(ctx, point);
+      const most = quantityOf(point.superimposed?.max);
+      const closed =
+        outletOf({ basis: ctx.doc }, point)?.end?.to === 'header' &&
+        most !== undefined &&
+        gaugePa(ctx, most) > 0;
+      if (!fluid && !closed) return [];
+      const named = fluid ?? answersOfPoint(ctx, point).flatMap((ca) => fluidOf(ctx, ca) ?? [])[0];
+      return [
+        onPoint(
+          point,
+          { fluid: named?.name ?? 'what the header holds' },
+          { field: `reliefPoints/${point.id}/bonnet` },
+        ),
+      ];
+    }),
+);
+
+function isActuated(point: ReliefPoint): boolean {
+  return point.axes.actuation.includes('power') || point.axes.actuation.includes('temperature');
+}
+
+function excepted(ctx: RuleContext, point: ReliefPoint): boolean {
+  const listed = point.power?.listed;
+  if (listed === 'controlled-system')
+    return ctx.rules.parameters['allowControlledSystem'] === true && point.power?.certificate !== undefined;
+  return listed !== undefined;
+}
+
+export const actuatedDeviceAlone = rule(
+  {
+    code: 'actuated-device-alone',
+    subject: 'device',
+    statement: '{device} needs outside power or acts on temperature, and {scenario} has no other device.',
+    condition:
+      'actuation power or temperature and it alone answers a credible scenario; exceptions by basis: certified controlled safety system (ISO 4126-5), ASME I steam generator, listed T&P valve on hot-water storage',
+    severity: 'stop',
+    gate: 'scenarios',
+    source:
+      'ASME VIII-1 UG-125(g) note: control instruments are not positive enough [S]; 46 CFR 54.15-10(b) pilot must open on failure [S]; ISO 4126-5 scope [S]',
+    parameter: 'allowControlledSystem',
+  },
+  (ctx) =>
+    ctx.answers.flatMap((ca): Hit[] => {
+      const members = (ca.group?.members ?? []).flatMap((member) => {
+        const point = ctx.lookup.points.get(member.point);
+        return point && member.credited && point.service === 'in-service' ? [point] : [];
+      });
+      const [first] = members;
+      if (!first || !members.every((point) => isActuated(point) && !excepted(ctx, point))) return [];
+      return [
+        onPoint(first, { scenario: scenarioName(ca.scenario) }, { field: `groups/${ca.group?.id ?? ''}` }),
+      ];
+    }),
+);
+
+export const nonReclosingAlone = rule(
+  {
+    code: 'non-reclosing-alone',
+    subject: 'device',
+    statement: '{device} does not reclose: after it acts, {inventory} of {fluid} is lost.',
+    condition: 'rupture disk or pin alone and fluid toxic, flammable or liquefied',
+    severity: 'justify',
+    gate: 'scenarios',
+    source: 'SPS 341 App. C note on non-reclosing devices [S]; [P]',
+  },
+  (ctx) =>
+    ctx.doc.reliefPoints.flatMap((point): Hit[] => {
+      if (
+        point.axes.recloses === 'yes' ||
+        point.purpose === 'shields-a-valve' ||
+        point.service !== 'in-service'
+      )
+        return [];
+      const shields = ctx.doc.reliefPoints.some((other) => other.with?.disk === point.id);
+      const lost = answersOfPoint(ctx, point)
+        .flatMap((ca) => fluidOf(ctx, ca) ?? [])
+        .find(
+          (fluid) =>
+            fluid.hazards?.toxic === true ||
+            fluid.hazards?.flammable === true ||
+            fluid.hazards?.liquefied === true,
+        );
+      if (shields || !lost) return [];
+      const held = quantityOf(ctx.lookup.equipment.get(point.on?.equipment ?? '')?.inventory);
+      return [onPoint(point, { inventory: held ?? 'the content', fluid: lost.name })];
+    }),
+);
+
+const LEAST_LIFT_SHARE = 0.3;
+const LEAST_LIFT = 0.002;
+
+export const reducedLiftMisused = rule(
+  {
+    code: 'reduced-lift-misused',
+    subject: 'device',
+    statement: 'The capacity of {device} is taken at full lift although its lift is {lift}.',
+    condition:
+      'low-lift or restricted and sheet uses full-lift area/capacity; or restricted lift < 30 % of full or < 2 mm (0.080 in); or restricted by other than maker/authorised shop with nameplate',
+    severity: 'stop',
+    gate: 'scenarios',
+    source: 'ASME VIII-1 UG-133(h) [S], UG-136(a)(11) [S]',
+  },
+  (ctx) =>
+    ctx.doc.reliefPoints.flatMap((point): Hit[] => {
+      if (point.axes.lift !== 'restricted') return [];
+      const lift = quantityOf(point.orifice.lift);
+      const full = quantityOf(point.orifice.fullLift);
+      const small =
+        lift !== undefined &&
+        (toSI(lift) < LEAST_LIFT * 0.999 ||
+          (full !== undefined && toSI(lift) < LEAST_LIFT_SHARE * toSI(full) * 0.999));
+      const unmarked = point.orifice.restrictedBy === 'other' || point.orifice.restrictionOnPlate !== true;
+      return small || unmarked
+        ? [onPoint(point, { lift: lift ?? 'restricted' }, { field: `reliefPoints/${point.id}/orifice` })]
+        : [];
+    }),
+);
+
+export const pilotUnfit = rule(
+  {
+    code: 'pilot-unfit',
+    subject: 'device',
+    statement: '{device} is pilot-operated in {service}, which can block or damage the pilot.',
+    condition:
+      "pilot and (service flagged solids, wax, polymer, hydrate, freezing, or temperature outside soft-goods limits default −29…204 °C) and none of: filter, heat tracing, purge, remote clean sense, maker's statement",
+    severity: 'justify',
+    gate: 'scenarios',
+    source: 'API 520-1 [M]',
+  },
+  (ctx) =>
+    ctx.doc.reliefPoints.flatMap((point): Hit[] => {
+      if (!point.axes.actuation.includes('pilot')) return [];
+      const { pilot } = point;
+      const kept =
+        pilot?.filter === true ||
+        pilot?.tracing === true ||
+        pilot?.purge === true ||
+        pilot?.sensing === 'remote' ||
+        pilot?.makerSays !== undefined;
+      const fouling = answersOfPoint(ctx, point)
+        .flatMap((ca) => fluidOf(ctx, ca) ?? [])
+        .find(({ hazards }) =>
+          [hazards?.solids, hazards?.wax, hazards?.polymer, hazards?.hydrate, hazards?.freezing].includes(
+            true,
+          ),
+        );
+      return fouling && !kept
+        ? [onPoint(point, { service: fouling.name }, { field: `reliefPoints/${point.id}/pilot` })]
+        : [];
+    }),
+);
+
+export const certificationMissing = rule(
+  {
+    code: 'certification-missing',
+    subject: 'device',
+    statement: '{device} has no certified capacity for the code basis of this site.',
+    condition:
+      '(a) new or changed device: mark/certificate absent (ASME UV/UD or successor under XIII; CE/UKCA category IV); (b) existing unchanged device',
+    severity: 'stop',
+    gate: 'scenarios',
+    source: 'ASME VIII-1 UG-129/131, XIII (2021+) [M]; PED 2.11 [M]',
+  },
+  (ctx) =>
+    ctx.doc.reliefPoints.flatMap((point): Hit[] => {
+      if (point.mark?.code !== undefined || point.mark?.certificate !== undefined) return [];
+      const before = ctx.prior?.doc.reliefPoints.find((other) => other.id === point.id);
+      const same = before !== undefined && before.maker === point.maker && before.model === point.model;
+      return [
+        onPoint(
+          point,
+          {},
+          { field: `reliefPoints/${point.id}/mark`, ...(same ? { severity: 'note' as const } : {}) },
+        ),
+      ];
+    }),
+);
