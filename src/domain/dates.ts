@@ -138,3 +138,12 @@ export function dayIn(instant: Instant, zone: string): Day {
   const part = (type: Intl.DateTimeFormatPartTypes) => parts.find((one) => one.type === type)?.value ?? '';
   return `${part('year').padStart(4, '0')}-${part('month')}-${part('day')}`;
 }
+
+/** Whole months from one day to another (2026-01-31 to 2026-02-28 is one); negative when the other is earlier. */
+export function monthsBetween(from: Day, to: Day): number {
+  if (daysBetween(from, to) < 0) return -monthsBetween(to, from);
+  const [year, month] = numbersOf(from);
+  const [thenYear, thenMonth] = numbersOf(to);
+  const months = (thenYear - year) * 12 + thenMonth - month;
+  return daysBetween(addMonths(from, months), to) < 0 ? months - 1 : months;
+}

@@ -1,0 +1,139 @@
+/* Gate of the field verification of one system: all seen, nothing differs, start-up items done. */
+import { monthsBetween } from '@domain/dates';
+import { faultsOfEntry, type Discrepancy, type FieldEntry, type FieldLine } from '@domain/field';
+import { type OpenPoint } from '@domain/result';
+import { type DocumentFacts, type GateFacts, nameOf, placeIn, point } from '../gate-facts';
+import { type DueItem } from '../types';
+import { movedBasis } from './check';
+import { voidedPoints } from './approval';
+import { deficiencyPoints, outcomePoints } from './outcomes';
+
+const SETTLED: readonly Discrepancy['state'][] = ['seen-again', 'accepted'];
+/** Due items that start-up always waits for; others only when they say so. */
+const BEFORE_START_UP: readonly DueItem['kind'][] = ['start-up', 'pssr', 'training'];
+
+/** The verifier's entry that counts for a line: the one seen last. */
+export function entryOf(line: FieldLine, facts: Pick<GateFacts, 'field'>): FieldEntry | undefined {
+  return facts.field.entries
+    .filter((entry) => entry.line === line.key && entry.as === 'verifier')
+    .reduce<FieldEntry | undefined>(
+      (last, entry) => (!last || entry.saw >= last.saw ? entry : last),
+      undefined,
+    );
+}
+
+/** Who installed what a line is about. */
+export function installersOf(line: FieldLine, facts: Pick<GateFacts, 'field'>): string[] {
+  return facts.field.entries
+    .filter((entry) => entry.line === line.key)
+    .flatMap((entry) => [
+      ...(entry.as === 'installer' ? [entry.by] : []),
+      ...(entry.installer ? [entry.installer] : []),
+    ]);
+}
+
+function linePoints(line: FieldLine, of: DocumentFacts, facts: GateFacts): OpenPoint[] {
+  const where = placeIn(facts, 'field', of, line.key);
+  const entry = entryOf(line, facts);
+  if (!entry)
+    return [point('field-line-missing', `${line.group}, ${line.label.toLowerCase()}: not seen yet.`, where)];
+  const faults = faultsOfEntry(line, entry).map((sentence) =>
+    point('field-evidence-missing', sentence, where),
+  );
+  const judges = facts.case.seats.filter(
+    (seat) => !seat.until && ['originator', 'checker'].includes(seat.role),
+  );
+  const apart =
+    !judges.some((seat) => seat.person === entry.by) && !installersOf(line, facts).includes(entry.by);
+  if (apart) return faults;
+  const name = nameOf(facts, entry.by);
+  return [
+    ...faults,
+    point(
+      'field-verifier',
+      `${line.label}: ${name} installed this or made the case, and cannot be the one who verifies it.`,
+      where,
+    ),
+  ];
+}
+
+function discrepancyPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
+  const keys = new Set(
+    facts.field.lines.filter((line) => line.document === of.document).map((line) => line.key),
+  );
+  const mine = new Map(
+    facts.field.entries.filter((entry) => keys.has(entry.line)).map((entry) => [entry.id, entry]),
+  );
+  return facts.field.discrepancies
+    .filter((each) => each.holds && mine.has(each.entry) && !SETTLED.includes(each.state))
+    .map((each) => {
+      const line = facts.field.lines.find((one) => one.key === mine.get(each.entry)?.line);
+      const sentence = `Discrepancy ${String(each.number)} (${line?.label ?? 'field sheet'}) holds start-up. ${each.clears}`;
+      return point(
+        'discrepancy-open',
+        sentence,
+        placeIn(facts, 'field', of, `discrepancy-${String(each.number)}`),
+      );
+    });
+}
+
+function startUpPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
+  const where = placeIn(facts, 'field', of, 'start-up');
+  const items = facts.dueItems
+    .filter((item) => item.case === facts.case.id && item.state === 'open')
+    .filter((item) => !item.document || item.document === of.document)
+    .filter(
+      (item) => item.bars === 'start-up' || (item.bars === undefined && BEFORE_START_UP.includes(item.kind)),
+    )
+    .map((item) =>
+      point('start-up-action-open', `${item.text} is not done, and start-up waits for it.`, where),
+    );
+  const papers = facts.case.brief.papers
+    .filter(
+      (paper) =>
+        paper.when === 'before-start-up' &&
+        paper.kind !== 'none' &&
+        !['issued', 'cancelled'].includes(paper.state),
+    )
+    .map((paper) =>
+      point('start-up-action-open', `${paper.reference} is not issued, and start-up waits for it.`, where),
+    );
+  return [...items, ...papers];
+}
+
+function aged(facts: GateFacts, of: DocumentFacts): OpenPoint[] {
+  const signed = facts.signatures
+    .filter((each) => ['approval', 'confirm-approval'].includes(each.gate) && each.valid)
+    .map((each) => each.at);
+  const latest = signed.sort().at(-1);
+  const months = latest ? monthsBetween(latest, facts.today) : 0;
+  if (months < facts.rules.approvalAge) return [];
+  const sentence = `The approval is ${String(months)} months old and the change is not in the field: an approver must confirm that it still holds.`;
+  return [point('approval-aged', sentence, placeIn(facts, 'summary', of))];
+}
+
+/** All that keeps one signed system from being put in force. */
+export function fieldPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
+  const lines = facts.field.lines.filter((line) => line.document === of.document);
+  const grade =
+    of.doc && of.doc.grade !== 'worked'
+      ? [
+          point(
+            'grade-not-worked',
+            `${of.tag} is not worked here yet; start-up needs a worked basis.`,
+            placeIn(facts, 'changes', of),
+          ),
+        ]
+      : [];
+  return [
+    ...voidedPoints(facts, ['scenarios', 'check', 'approval']),
+    ...grade,
+    ...movedBasis(of, facts),
+    ...lines.flatMap((line) => linePoints(line, of, facts)),
+    ...discrepancyPoints(of, facts),
+    ...startUpPoints(of, facts),
+    ...aged(facts, of),
+    ...deficiencyPoints(of, facts, true),
+    ...outcomePoints('field', of, facts),
+  ];
+}

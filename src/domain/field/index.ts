@@ -1,0 +1,5 @@
+/* The public face of the field sheet. */
+export * from './types';
+export * from './compare';
+export * from './lines';
+export * from './discrepancy';
