@@ -1,0 +1,83 @@
+/* Which loads and sizes of the invented site this engine works by itself; the rest stand as external sheets. */
+import { type Input } from '@domain/basis';
+import { methodById } from '@engine/catalog';
+import { type DemoAnswer, type DemoInput } from './demo-types';
+import { inputOf } from './figures';
+import { fluidId } from './fluids';
+import { idOf } from './ids';
+
+/** Methods for which the invented site's inputs suffice. */
+const CARRIED = new Set([
+  'a.gas',
+  'b.steam',
+  'c.liquid',
+  'e.fire-wetted',
+  'f.blocked-outlet',
+  'f.thermal-expansion',
+  'f.vaporisation',
+]);
+
+/** True when the engine has the method and their inputs suffice for it. */
+export function worksHere(method: string): boolean {
+  return CARRIED.has(method) && methodById(method) !== undefined;
+}
+
+const VESSEL: Record<string, string> = {
+  orientation: 'shape/orientation',
+  D: 'shape/diameter',
+  L: 'shape/length',
+  heads: 'shape/heads',
+  liquid_level: 'levels/fire',
+  elevation_of_bottom: 'elevation',
+};
+const INSULATION: Record<string, string> = {
+  insulation_conductivity: 'k_ins',
+  insulation_thickness: 'thickness',
+};
+
+/** The n-th vessel's inputs, used from the document: bare names for the first, with _2, _3 … after it. */
+function vesselInputs(tag: string, n: number): [string, Input][] {
+  const suffix = n === 1 ? '' : `_${String(n)}`;
+  const used = Object.entries(VESSEL).map(([name, path]): [string, Input] => [
+    `${name}${suffix}`,
+    { use: `equipment/${idOf('eq', tag)}/${path}` },
+  ]);
+  return [[`tag${suffix}`, { word: tag }], ...used];
+}
+
+function vesselsOf(input: DemoInput | undefined): string[] {
+  return Array.isArray(input?.value) ? input.value : [];
+}
+
+/** Inputs of the pool fire: each vessel named, the allowance for piping, drainage, and insulation where it is credited. */
+export function fireWettedInputs(answer: DemoAnswer): Record<string, Input> {
+  const { vessels, ...others } = answer.load.inputs;
+  const stated = Object.entries(others).map(([name, input]): [string, Input] => [
+    INSULATION[name] ?? name,
+    inputOf(input),
+  ]);
+  const insulated = 'insulation_conductivity' in others;
+  const process: [string, Input][] = insulated
+    ? [['T_process', { use: `fluids/${fluidId(answer.fluid)}/T` }]]
+    : [];
+  return Object.fromEntries([
+    ...vesselsOf(vessels).flatMap((tag, n) => vesselInputs(tag, n + 1)),
+    ...stated,
+    ...process,
+  ]);
+}
+
+const VAPORISATION: Record<string, string> = {
+  UA: 'UA',
+  source_temperature: 'T_source',
+  sink_temperature: 'T_sink',
+  duty: 'Q',
+  heat_removed: 'Q_removed',
+};
+
+/** Inputs of the heat balance W = Q/λ under the engine's names; the latent heat is that of the fluid. */
+export function vaporisationInputs(inputs: Record<string, Input>): Record<string, Input> {
+  return Object.fromEntries(
+    Object.entries(inputs).map(([name, input]) => [VAPORISATION[name] ?? name, input]),
+  );
+}
