@@ -23,3 +23,5 @@ export {
 } from './unseen-items';
 export { toleranceOf, TOLERANCES, type Tolerance, type UnseenQuantity } from './unseen-tolerances';
 export { lengthOf } from './rich-text';
+export * from './signature';
+export * from './acts';
