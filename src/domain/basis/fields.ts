@@ -20,3 +20,8 @@ export function wordsOfName(name: string): string {
     (_all, before: string, capital: string) => `${before} ${capital.toLowerCase()}`,
   );
 }
+
+/** A sentence begins with a capital. */
+export function capital(words: string): string {
+  return words.charAt(0).toUpperCase() + words.slice(1);
+}

@@ -2,6 +2,7 @@
 import type { z } from 'zod';
 import type { FieldError } from '@domain/result';
 import { describePath } from './describe';
+import { capital } from './fields';
 import { childOf, pathOfIndexes } from './paths';
 
 type Issue = z.core.$ZodIssue;
@@ -37,9 +38,10 @@ const KINDS: Readonly<Record<string, string>> = {
 
 /** What would be right, after the name of the field. */
 function remedy(issue: Issue, present: unknown): string {
+  if (present === undefined && issue.code !== 'unrecognized_keys') return 'is missing';
   switch (issue.code) {
     case 'invalid_type':
-      return present === undefined ? 'is missing' : `should be ${KINDS[issue.expected] ?? issue.expected}`;
+      return `should be ${KINDS[issue.expected] ?? issue.expected}`;
     case 'unrecognized_keys':
       return `does not have ${issue.keys.map((key) => `"${key}"`).join(', ')}`;
     case 'invalid_value':
@@ -63,10 +65,6 @@ function readAt(document: unknown, path: readonly PropertyKey[]): unknown {
       Array.isArray(value) ? (value as unknown[])[Number(part)] : childOf(value, String(part)),
     document,
   );
-}
-
-function capital(words: string): string {
-  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
 /** The complaints of a schema about a document as field errors: id-paths, codes, sentences. At most 25. */

@@ -6,6 +6,7 @@ import type { RangeContext } from '@domain/rules/ranges';
 import { basisSchema, type Basis } from './basis';
 import { sameContent } from './canonical';
 import { describePath } from './describe';
+import { capital } from './fields';
 import type { Path } from './figures';
 import { impossibleFigures } from './impossible';
 import { parseWith } from './parse';
@@ -89,7 +90,7 @@ function reachable(document: unknown, path: Path): boolean {
 
 /** Why an op can't be applied to this document; nothing when it can. */
 function faultOf(document: unknown, op: Op): Fault | undefined {
-  const label = describePath(document, op.path).label;
+  const label = capital(describePath(document, op.path).label);
   if (partsOf(op.path).some((part) => FORBIDDEN.has(part))) {
     return { stale: false, sentence: `"${op.path}" is not a place of a document.` };
   }
@@ -152,7 +153,7 @@ export function applyOne(document: unknown, op: Op): Result<unknown> {
   const stale = op.was !== undefined && !sameContent(op.was ?? null, found);
   if (!fault && !stale) return ok(changed(document, op));
   const sentence = stale
-    ? `${describePath(document, op.path).label} has changed since you read it.`
+    ? `${capital(describePath(document, op.path).label)} has changed since you read it.`
     : (fault?.sentence ?? '');
   const code = stale || fault?.stale ? 'STALE' : 'SCHEMA';
   return fail(code, sentence, {

@@ -1,10 +1,15 @@
 /* Ids that point nowhere: every reference within a basis leads to an element that is there. */
 import type { Basis } from './basis';
 import { describePath } from './describe';
+import { capital } from './fields';
 import type { Path } from './figures';
 import { getAt } from './paths';
 
 export type BrokenReference = { path: Path; sentence: string };
+function nameOf(basis: Basis, path: Path): string {
+  return capital(describePath(basis, path).label);
+}
+
 type Check = (path: Path, id: string | undefined, kind: keyof typeof LISTS) => void;
 
 /** What can be pointed at, and where it stands. */
@@ -120,7 +125,7 @@ export function checkReferences(basis: Basis): BrokenReference[] {
     if (id === undefined || ids.get(kind)?.has(id)) return;
     broken.push({
       path,
-      sentence: `${describePath(basis, path).label} points at a ${kind} that is not in this basis.`,
+      sentence: `${nameOf(basis, path)} points at a ${kind} that is not in this basis.`,
     });
   };
   checkEquipmentAndPoints(basis, check);
@@ -131,7 +136,7 @@ export function checkReferences(basis: Basis): BrokenReference[] {
     if (side === undefined || !item || item.sides.some((one) => one.id === side)) continue;
     broken.push({
       path,
-      sentence: `${describePath(basis, path).label} points at a side that ${item.tag} does not have.`,
+      sentence: `${nameOf(basis, path)} points at a side that ${item.tag} does not have.`,
     });
   }
   return [...broken, ...brokenUses(basis)];
@@ -151,7 +156,7 @@ function brokenUses(basis: Basis): BrokenReference[] {
           return [
             {
               path,
-              sentence: `${describePath(basis, path).label} takes its value from a place that is not there (${input.use}).`,
+              sentence: `${nameOf(basis, path)} takes its value from a place that is not there (${input.use}).`,
             },
           ];
         });

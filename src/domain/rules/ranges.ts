@@ -1,5 +1,6 @@
 /* All ranges of inputs by key, and the check of a figure against them. */
 import { convert, dimensionOf, formatNumber, formatQuantity, unitLabel, type Q } from '@engine/quantity';
+import { capital } from '@domain/basis/fields';
 import { type Range, type RangeRow } from './range-row';
 import { OWN_RANGES } from './ranges-own';
 import { RULEBOOK_RANGES } from './ranges-rulebook';
@@ -48,10 +49,6 @@ function between(row: RangeRow, fence: Fence, q: Q, barometer: Q, from: 0 | 1, t
   return from === 0 && row.open
     ? `above ${low} and up to ${high}${tail}`
     : `between ${low} and ${high}${tail}`;
-}
-
-function capital(words: string): string {
-  return words.charAt(0).toUpperCase() + words.slice(1);
 }
 
 /** Where a value lies in a range. */
