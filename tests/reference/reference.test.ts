@@ -15,12 +15,17 @@ const FILES = { aGas, bSteam, cLiquid, eFire, fLoads, hLimits, iAreas };
 
 describe.each(Object.entries(FILES))('%s', (_file, { cases }) => {
   const all = cases as unknown as ReferenceCase[];
-  it.each(all.map((one) => [`${one.id}: ${one.checks} [${one.source}]`, one] as const))('%s', (_name, one) => {
-    const answer = calculate({ topic: one.topic, inputs: one.inputs });
-    expect(answer.refused).toBeUndefined();
-    const wrong = Object.entries(one.expected).flatMap(([name, wanted]) => disagreements(name, answer.outputs[name], wanted));
-    expect(wrong).toEqual([]);
-  });
+  it.each(all.map((one) => [`${one.id}: ${one.checks} [${one.source}]`, one] as const))(
+    '%s',
+    (_name, one) => {
+      const answer = calculate({ topic: one.topic, inputs: one.inputs });
+      expect(answer.refused).toBeUndefined();
+      const wrong = Object.entries(one.expected).flatMap(([name, wanted]) =>
+        disagreements(name, answer.outputs[name], wanted),
+      );
+      expect(wrong).toEqual([]);
+    },
+  );
 
   it('names only outputs that its methods declare', () => {
     for (const one of all) {
@@ -35,7 +40,9 @@ describe('the comparison itself', () => {
     const tolerance = { value: 100, unit: 'mm2', rel_tol: 0.01 };
     expect(disagreements('A', { value: 102, unit: 'mm2' }, tolerance)).toHaveLength(1);
     expect(disagreements('A', { value: 1.00001e-4, unit: 'm2' }, tolerance)).toEqual([]);
-    expect(disagreements('A', { value: 'L', unit: '-' }, { value: 'K', unit: '-', rel_tol: 0 })).toHaveLength(1);
+    expect(disagreements('A', { value: 'L', unit: '-' }, { value: 'K', unit: '-', rel_tol: 0 })).toHaveLength(
+      1,
+    );
     expect(disagreements('A', undefined, tolerance)).toEqual(['A is missing']);
   });
 });

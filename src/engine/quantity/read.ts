@@ -18,8 +18,9 @@ export type ReadResult =
 type Failure = Extract<ReadResult, { ok: false }>;
 
 const SPACES = /[\s\u00a0\u2009\u202f']/g;
+/** A sign, then digits grouped in threes by spaces, or digits with points and commas; then an exponent. */
 const NUMBER =
-  /^\s*([+\-\u2212]?\s*(?:\d[\d.,\s\u00a0\u2009\u202f']*|[.,]\d+)(?:[eE][+\-\u2212]?\d+)?)(?=$|[^\d])/;
+  /^\s*([+\-\u2212]?\s*(?:\d{1,3}(?:[\s\u00a0\u2009\u202f']\d{3}(?!\d))+(?:[.,]\d+)?|\d[\d.,]*|[.,]\d+)(?:[eE][+\-\u2212]?\d+)?)/;
 
 const NAMES: Partial<Record<Dimension, string>> = {
   'pressure-gauge': 'a gauge pressure',
