@@ -1,10 +1,9 @@
 /* Method a.gas: required effective area for gas or vapour, critical and subcritical. */
 import { type Method } from '../../catalog/types';
-import { unitLabel } from '../../quantity';
 import { type SheetBuilder, texNumber, workSheet } from '../../sheet';
 import { GAS_INPUTS, input, optional, output, RELIEVING_INPUTS } from '../common/describe';
 import { letterStep } from '../common/letter-step';
-import { absolutePressure, barometer, relievingAbsolute } from '../common/pressures';
+import { absolutePressure, barometer, relievingAbsolute, shownPressure } from '../common/pressures';
 import { SYSTEM_UNITS, type System, systemOf } from '../common/system';
 import { criticalArea, criticalRatio, gasC, gasF2, GAS_FORMS, type GasFlow, subcriticalArea } from './flow';
 
@@ -23,12 +22,11 @@ function readGas(sheet: SheetBuilder, system: System): GasFlow {
     ? absolutePressure(sheet, 'P2', 'P_2', system)
     : sheet.keep('P2', barometer(sheet, system), 'P_2');
   if (P2 >= P1) {
-    const show = (p: number) => `${texNumber(p).replace(/\\,/g, '\u2009')} ${unitLabel(u.P)}`;
     const relation = P2 === P1 ? 'equals' : 'is below';
     sheet.refuse(
       'NO_FLOW',
       'P2',
-      `Relieving pressure ${show(P1)} ${relation} the back pressure ${show(P2)}: nothing can flow.`,
+      `Relieving pressure ${shownPressure(sheet, 'P1', P1, u.P)} ${relation} the back pressure ${shownPressure(sheet, 'P2', P2, u.P)}: nothing can flow.`,
     );
   }
   const factor = (name: string, tex: string, fallback: number) =>

@@ -1,5 +1,4 @@
 /* The last step of every sizing by effective area: the orifice letter. */
-import { unitLabel } from '../../quantity';
 import { type SheetBuilder, texNumber } from '../../sheet';
 import { areaOf, chooseLetter } from '../i-letters/letters';
 import { SYSTEM_UNITS, type System } from './system';
@@ -17,11 +16,12 @@ export function letterStep(sheet: SheetBuilder, area: number, system: System): v
     return;
   }
   const effective = areaOf(chosen, system);
+  const square = system === 'US' ? '\\text{in}^2' : '\\text{mm}^2';
   sheet.say({
     symbol: '\\text{orifice}',
     meaning: 'smallest orifice letter with at least this effective area',
     value: chosen.letter,
-    tex: `\\text{${chosen.letter}}:\\ ${texNumber(effective)}\\ \\text{${unitLabel(unit)}} \\ge ${texNumber(area)}\\ \\text{${unitLabel(unit)}}`,
+    tex: `\\text{${chosen.letter}}:\\ ${texNumber(effective)}\\,${square} \\ge ${texNumber(area)}\\,${square}`,
     clause: 'API 526, effective orifice areas',
   });
   sheet.output('orifice_letter', chosen.letter);

@@ -1,5 +1,5 @@
 /* Reading pressures on a sheet: gauge or absolute, each step from one to the other shown. */
-import { dimensionOf, type Q, unitLabel } from '../../quantity';
+import { dimensionOf, formatQuantity, type Q, unitLabel } from '../../quantity';
 import { type SheetBuilder } from '../../sheet';
 import { SYSTEM_UNITS, type System } from './system';
 
@@ -96,4 +96,11 @@ export function relievingAbsolute(sheet: SheetBuilder, system: System): number {
   );
   sheet.output('P1', value, P);
   return value;
+}
+
+/** A pressure for a sentence: as it was typed when it was typed as absolute, else as worked. */
+export function shownPressure(sheet: SheetBuilder, name: string, value: number, unit: string): string {
+  const given = sheet.inputs[name];
+  const typed = typeof given === 'object' && dimensionOf(given.unit) === dimensionOf(unit);
+  return formatQuantity(typed ? given : { value, unit });
 }

@@ -1,10 +1,10 @@
 /* Flow through a hole (broken tube, leaking check valve): bare arithmetic and the steps both sheets share. */
 import { fromSI } from '../../quantity';
-import { type SheetBuilder, texNumber } from '../../sheet';
+import { type SheetBuilder } from '../../sheet';
 import { criticalRatio, GAS_CONSTANT, nozzleFlux } from '../a-gas/flow';
 import { type MethodInput } from '../../catalog/types';
 import { input, optional } from '../common/describe';
-import { absolutePressure } from '../common/pressures';
+import { absolutePressure, shownPressure } from '../common/pressures';
 
 /** Mass flux of a liquid that does not flash through a sharp opening, kg/(m²·s): √(2 ρ Δp), Pa and kg/m³. */
 export function liquidFlux(rho: number, drop: number): number {
@@ -33,12 +33,11 @@ export const HIGH_SIDE_INPUTS: readonly MethodInput[] = [
 export function readSides(sheet: SheetBuilder): { high: number; low: number } {
   const high = absolutePressure(sheet, 'P_high', 'P_{high}', 'SI');
   const low = absolutePressure(sheet, 'P_low', 'P_{low}', 'SI');
-  const show = (p: number) => `${texNumber(p).replace(/\\,/g, '\u2009')} kPaa`;
   if (low >= high)
     sheet.refuse(
       'NO_FLOW',
       'P_high',
-      `The high side at ${show(high)} is not above the relieving pressure ${show(low)} of the low side: nothing flows over.`,
+      `The high side at ${shownPressure(sheet, 'P_high', high, 'kPa_abs')} is not above the relieving pressure ${shownPressure(sheet, 'P_low', low, 'kPa_abs')} of the low side: nothing flows over.`,
     );
   return { high, low };
 }

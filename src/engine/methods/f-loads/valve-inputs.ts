@@ -1,9 +1,8 @@
 /* What the control-valve sheets read alike: the coefficient with its kind, the fittings, the two pressures. */
 import { type MethodInput } from '../../catalog/types';
-import { unitLabel } from '../../quantity';
-import { type SheetBuilder, texNumber } from '../../sheet';
+import { type SheetBuilder } from '../../sheet';
 import { optional } from '../common/describe';
-import { absolutePressure } from '../common/pressures';
+import { absolutePressure, shownPressure } from '../common/pressures';
 import { type CoefficientType, type Fittings } from './control-valve';
 
 /** The kinds as words of the reference topics. */
@@ -59,12 +58,11 @@ export function readFittings(sheet: SheetBuilder): Fittings | undefined {
 export function readPressures(sheet: SheetBuilder): { P1: number; P2: number } {
   const P1 = absolutePressure(sheet, 'P1', 'P_1', 'SI');
   const P2 = absolutePressure(sheet, 'P2', 'P_2', 'SI');
-  const show = (p: number) => `${texNumber(p).replace(/\\,/g, '\u2009')} ${unitLabel('kPa_abs')}`;
   if (P2 >= P1)
     sheet.refuse(
       'NO_FLOW',
       'P2',
-      `The pressure before the valve, ${show(P1)}, is not above the pressure after it, ${show(P2)}: nothing can flow.`,
+      `The pressure before the valve, ${shownPressure(sheet, 'P1', P1, 'kPa_abs')}, is not above the pressure after it, ${shownPressure(sheet, 'P2', P2, 'kPa_abs')}: nothing can flow.`,
     );
   return { P1, P2 };
 }

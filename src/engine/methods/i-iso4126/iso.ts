@@ -1,8 +1,8 @@
 /* Methods i.iso4126-gas, -steam, -liquid: required actual flow area with the certified derated coefficient. */
 import { type Method, type MethodInput } from '../../catalog/types';
-import { type SheetBuilder, texNumber, workSheet } from '../../sheet';
+import { type SheetBuilder, workSheet } from '../../sheet';
 import { GAS_INPUTS, input, optional, output } from '../common/describe';
-import { absoluteIn } from '../common/pressures';
+import { absoluteIn, shownPressure } from '../common/pressures';
 import { isoC, isoGasArea, isoKb, isoLiquidArea, isoSteamArea } from './flow';
 
 const CLAUSE = 'ISO 4126-1, sizing';
@@ -27,7 +27,7 @@ function readShared(sheet: SheetBuilder): { Qm: number; p0: number; pb: number; 
     sheet.refuse(
       'NO_FLOW',
       'pb',
-      `Relieving pressure ${texNumber(p0)} bara is not above the back pressure ${texNumber(pb)} bara: nothing can flow.`,
+      `Relieving pressure ${shownPressure(sheet, 'p0', p0, 'bar_abs')} is not above the back pressure ${shownPressure(sheet, 'pb', pb, 'bar_abs')}: nothing can flow.`,
     );
   return { Qm, p0, pb, Kdr: sheet.number('Kdr', '-', { above: 0, max: 1 }, 'K_{dr}') };
 }
