@@ -30,7 +30,11 @@ export function placeLetters(letters: LetterAt[]): LetterLabel[] {
   const runs: LetterAt[][] = [];
   for (const at of [...letters].sort((a, b) => a.x - b.x)) {
     let run = [at];
-    for (let last = runs.at(-1); last && !at.kept && !last[0]?.kept && crowds(last, run); last = runs.at(-1)) {
+    for (
+      let last = runs.at(-1);
+      last && !at.kept && !last[0]?.kept && crowds(last, run);
+      last = runs.at(-1)
+    ) {
       run = [...last, ...run];
       runs.pop();
     }
@@ -40,7 +44,13 @@ export function placeLetters(letters: LetterAt[]): LetterLabel[] {
     .filter((run, i) => {
       if (run[0]?.kept) return true;
       const beside = [runs[i - 1], runs[i + 1]].filter((other) => other?.[0]?.kept);
-      return !beside.some((other) => other && (middle(other) > middle(run) ? crowds(run, other) : crowds(other, run)));
+      return !beside.some(
+        (other) => other && (middle(other) > middle(run) ? crowds(run, other) : crowds(other, run)),
+      );
     })
-    .map((run) => ({ label: labelOf(run), x: middle(run), ...(run[0]?.kept ? { kept: run[0].letter } : {}) }));
+    .map((run) => ({
+      label: labelOf(run),
+      x: middle(run),
+      ...(run[0]?.kept ? { kept: run[0].letter } : {}),
+    }));
 }

@@ -1,14 +1,14 @@
 /* Marks that stand beside words: verdicts and the valves of the gate rail. */
 import { path, px } from './draw';
 
-export type VerdictWord = 'adequate' | 'marginal' | 'inadequate' | 'unsized';
+export type VerdictWord = 'adequate' | 'marginal' | 'inadequate' | 'not-sized';
 export type GateState = 'passed' | 'waiting' | 'shut' | 'held';
 
 export const VERDICT_WORDS: Record<VerdictWord, string> = {
   adequate: 'Adequate',
   marginal: 'Marginal',
   inadequate: 'Inadequate',
-  unsized: 'Not sized',
+  'not-sized': 'Not sized',
 };
 
 const SEAT = '<rect x="14" y="1" width="2" height="12"/>';
@@ -16,7 +16,7 @@ const VERDICT_SHAPES: Record<VerdictWord, string> = {
   adequate: `<rect x="1" y="5" width="9" height="4"/>${SEAT}`,
   marginal: `<rect x="1" y="5" width="13" height="4"/>${SEAT}`,
   inadequate: `<rect x="1" y="5" width="13" height="4"/>${SEAT}<path d="M16 2h5v10h-5z"/>`,
-  unsized: `<rect x="1" y="6" width="2" height="2"/><rect x="5" y="6" width="2" height="2"/><rect x="9" y="6" width="2" height="2"/>${SEAT}`,
+  'not-sized': `<rect x="1" y="6" width="2" height="2"/><rect x="5" y="6" width="2" height="2"/><rect x="9" y="6" width="2" height="2"/>${SEAT}`,
 };
 
 /** The orifice bar reduced to 22 × 14: required area is the bar, installed area the seat line. */

@@ -1,37 +1,42 @@
 /* Orifice bar: required against installed area, linear in mm² from zero so that lengths are honest; letters stand where their areas stand. */
+import { ORIFICE_LETTERS } from '@engine/methods/i-letters/letters';
 import { formatNumber } from '@engine/quantity';
 import { path, px, text } from './draw';
 import { placeLetters } from './letters';
 
-/** Letter → effective area in mm², smallest first. */
-export type LetterScale = readonly { letter: string; area: number }[];
-
 export type BarScale = {
-  /** Area at the right end, mm². */
+  /** Area at the right end; all areas of a scale are in its unit, mm² unless it says in². */
   max: number;
+  unit?: 'mm²' | 'in²';
   width?: number;
-  /** Installed area, or the one installed if the case is accepted, mm². */
+  /** Installed area, or the one installed if the case is accepted, in the unit of the scale. */
   installed: number;
-  /** Area installed today when that is another one, mm². */
+  /** Area installed today when that is another one. */
   present?: number;
 };
 
 const WIDTH = 300;
-const same = (a: number, b: number | undefined) => b !== undefined && Math.abs(a - b) < 0.05;
+/** Printed areas of letters are rounded, so 1 840.6 and 1 841 mm² are one letter. */
+const same = (a: number, b: number | undefined) =>
+  b !== undefined && Math.abs(a - b) <= 0.002 * Math.max(a, b);
 
-/** An upper end for the scale: a tenth beyond the larger of required and installed. Areas in mm². */
+/** An upper end for the scale: a tenth beyond the larger of required and installed. Any unit. */
 export function scaleMax(areas: number[]): number {
   return Math.max(1, ...areas) * 1.1;
 }
 
 /** The ruler in a column's head, so that every row of the table shares it. */
-export function orificeRuler(scale: BarScale, letters: LetterScale): string {
+export function orificeRuler(scale: BarScale): string {
   const width = scale.width ?? WIDTH;
   const x = (area: number) => px((area / scale.max) * (width - 2) + 1);
+  const letters = ORIFICE_LETTERS.map(({ letter, mm2, in2 }) => ({
+    letter,
+    area: scale.unit === 'in²' ? in2 : mm2,
+  }));
   const seen = letters.filter(({ area }) => area <= scale.max);
   const own = [scale.installed, scale.present]
     .filter((area): area is number => area !== undefined && !seen.some((known) => same(known.area, area)))
-    .map((area) => ({ letter: formatNumber(area, 0), area }));
+    .map((area) => ({ letter: formatNumber(area, scale.unit === 'in²' ? 2 : 0), area }));
   const all = [...seen, ...own];
   const kept = (area: number) => same(area, scale.installed) || same(area, scale.present);
   const ticks = all.map(({ area }) => {
@@ -48,17 +53,19 @@ export function orificeRuler(scale: BarScale, letters: LetterScale): string {
 }
 
 export type BarFigures = {
-  /** Required area in mm²; absent: not sized. */
+  /** Required area; absent: not sized. */
   required?: number;
-  /** Required area before the change, mm². */
+  /** Required area before the change. */
   before?: number;
   height?: number;
 };
 
 function barSentence(scale: BarScale, required: number | undefined): string {
-  if (required === undefined) return `not sized, installed ${formatNumber(scale.installed, 1)} mm²`;
+  const unit = scale.unit ?? 'mm²';
+  const digits = unit === 'in²' ? 3 : 1;
+  if (required === undefined) return `not sized, installed ${formatNumber(scale.installed, digits)} ${unit}`;
   const used = formatNumber((required / scale.installed) * 100, 1);
-  return `required ${formatNumber(required, 0)} of ${formatNumber(scale.installed, 1)} mm², ${used} %`;
+  return `required ${formatNumber(required, digits)} of ${formatNumber(scale.installed, digits)} ${unit}, ${used} %`;
 }
 
 /** One row: the bar is the required area, the thick line the installed area; what goes beyond it is a taller block. */
@@ -76,7 +83,8 @@ export function orificeBar(scale: BarScale, figures: BarFigures): string {
   if (required === undefined) drawn += path('or-none', `M1 ${y + 0.5}H${seat}`);
   else {
     drawn += `<rect class="or-bar" x="1" y="${y - 3}" width="${px(Math.max(0.5, Math.min(x(required), seat) - 1))}" height="6"/>`;
-    if (required > scale.installed) drawn += path('or-over', `M${seat} ${y - 6}H${x(required)}V${y + 6}H${seat}Z`);
+    if (required > scale.installed)
+      drawn += path('or-over', `M${seat} ${y - 6}H${x(required)}V${y + 6}H${seat}Z`);
   }
   if (before !== undefined) drawn += path('or-old', `M${x(before)} ${y + 4}l3.5 5h-7Z`);
   drawn += path('or-seat', `M${seat} -1V${height + 1}`);
