@@ -37,7 +37,8 @@ export function accumulated(q: Q, code: Code, kind: AccumulationClass, rules: Ju
   const terms = limitTerms(CLASSES[kind], options);
   const factor = kind === 'storage-fire' && code.basis !== 'en' ? STORAGE_FACTOR : terms.factor;
   const floor = { value: terms.floor, unit: FLOOR_UNIT[code.units] };
-  const pa = Math.max(factor * toSI(q), toSI(q) + toSI(floor));
+  const gauge = convert(q, 'Pa_g', { barometer: rules.barometer });
+  const pa = Math.max(factor * gauge, gauge + toSI(floor));
   const clause = CLAUSES[code.basis] ?? 'ASME VIII-1 UG-125(c)';
   return { pa, ...written(q, factor, floor), clause };
 }

@@ -1,6 +1,6 @@
 /* Limit sheets: the maximum allowable accumulated pressure (MAAP) and the relieving pressure of each answer, by its side's code. */
 import { type Code, type Path, quantityOf, type Side } from '@domain/basis';
-import { convert, fromSI, type Q, toSI } from '@engine/quantity';
+import { convert, dimensionOf, fromSI, type Q, toSI } from '@engine/quantity';
 import { type Inputs, type Step } from '@engine/sheet';
 import { type AccumulationClass, accumulated } from './accumulation';
 import { sheetHash } from './keys';
@@ -18,6 +18,11 @@ const ABSOLUTE: Record<string, string> = {
 };
 
 type Ground = { side: Side; mawp: Q; mawpAt: Path; code: Code; made: Made };
+
+/** The unit of a gauge reading; an absolute one is told in kPa gauge. */
+function gaugeUnit(q: Q): string {
+  return dimensionOf(q.unit) === 'pressure-gauge' ? q.unit : 'kPa_g';
+}
 
 /** The absolute unit that goes with a gauge unit. */
 export function absoluteUnit(gauge: string): string {
@@ -117,7 +122,7 @@ function classLimit(
   }
   ground.made.inputs['set_pressure'] = highest.set;
   ground.made.from['set_pressure'] = highest.path;
-  const unit = ground.mawp.unit;
+  const unit = gaugeUnit(ground.mawp);
   const maap = accumulated(ground.mawp, ground.code, kind, work.rules);
   const bySet = accumulated(highest.set, ground.code, kind, work.rules);
   const relief = Math.min(maap.pa, bySet.pa);
@@ -156,7 +161,7 @@ function limitStep(
 type Limits = { maap: number; relief: number; steps: Step[]; set?: Q };
 
 function finished(work: Work, key: SheetKey, ground: Ground, limits: Limits): Sheet {
-  const unit = ground.mawp.unit;
+  const unit = gaugeUnit(ground.mawp);
   const relief = fromSI(limits.relief, unit);
   const p1: Q = { value: convert(relief, absoluteUnit(unit), work.context), unit: absoluteUnit(unit) };
   const outputs: Inputs = {
@@ -167,7 +172,10 @@ function finished(work: Work, key: SheetKey, ground: Ground, limits: Limits): Sh
   };
   if (limits.set) {
     outputs['set_pressure'] = limits.set;
-    outputs['overpressure'] = { value: limits.relief / toSI(limits.set) - 1, unit: '-' };
+    outputs['overpressure'] = {
+      value: limits.relief / convert(limits.set, 'Pa_g', work.context) - 1,
+      unit: '-',
+    };
   }
   const steps = [
     ...limits.steps,

@@ -76,15 +76,18 @@ function methodSize(
 
 type Task = { key: SheetKey; at: Path; calc: Calc & { by: 'method' }; resolved: Resolved };
 
-/** Solves for the back pressure that the flow through the installed area makes, then works the sheet there. */
+/** Solves for the back pressure that the flow through the installed area makes; gives the sheet worked there. */
 function settled(work: Work, ca: CredibleAnswer, at: (back: BackPressure) => Sheet): Sheet {
   const backAt = backPressureOf(work, ca);
   const quiet = backAt(0);
-  const solved = solveFixedPoint((pa) => backAt(flowThrough(work, ca, at({ ...quiet, pa }))).pa, quiet.pa, {
-    lo: 0,
-    hi: HIGHEST_BACK_PRESSURE,
-  });
-  const sheet = at({ ...backAt(0), pa: solved.value });
+  let latest: { pa: number; sheet: Sheet } | undefined;
+  const sheetAt = (pa: number): Sheet => {
+    if (latest?.pa !== pa) latest = { pa, sheet: at({ ...quiet, pa }) };
+    return latest.sheet;
+  };
+  const range = { lo: 0, hi: HIGHEST_BACK_PRESSURE };
+  const solved = solveFixedPoint((pa) => backAt(flowThrough(work, ca, sheetAt(pa))).pa, quiet.pa, range);
+  const sheet = sheetAt(solved.value);
   if (solved.converged || sheet.refused) return sheet;
   const text = `Flow and back pressure do not settle: ${solved.why}.`;
   return { ...sheet, refused: { code: 'NOT_CONVERGED', text, field: sheet.from['P2'] ?? sheet.key } };

@@ -100,8 +100,9 @@ export const activeSafeguardCredited = rule(
     ),
 );
 
+/** Words of a reason that name something to be seen in the plant. */
 const CITED =
-  /\b(lock(ed|s)?|car[- ]?seal(ed)?|spades?|spectacle[- ]?blind\w*|blind(ed|s)?|travel stop|restriction orifice|removed spool|spool (is )?removed|impeller|governor|fails? (open|shut|closed))\b/i;
+  /(?<![\w-])(locked (open|shut|closed)|car[- ]?seal(ed)?|lock number|spade[sd]?|(spectacle[- ]?)?blind(ed|s)?|blanked|travel stop|restriction orifice|removed spool|spool (is )?removed|impeller|governor|fails? (open|shut|closed))(?![\w-])/i;
 
 /** Things in the plant that a scenario leans on but that nobody is asked to see. */
 function unseen(ctx: RuleContext, scenario: Scenario): string | undefined {
