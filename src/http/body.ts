@@ -2,6 +2,7 @@
 import { type z } from 'zod';
 import { fail, fieldErrors, ok, type Result } from '@domain/result';
 import { type Context, type Sent } from './context';
+import { nested } from './nest';
 
 /** The largest body that is read, in bytes. Files have a route of their own. */
 export const BODY_LIMIT = 1_000_000;
@@ -66,7 +67,7 @@ async function readForm(bytes: Uint8Array, type: string): Promise<Result<Sent>> 
   const typed = all.filter(([name]) => !name.startsWith('_'));
   return ok({
     form: true,
-    body: gather(typed),
+    body: nested(gather(typed)),
     typed,
     version: own('_version'),
     key: own('_key'),

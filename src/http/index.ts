@@ -5,4 +5,6 @@ export { etagOf, onceFrom, versionFrom, type Once } from './conditional';
 export { type Context, type Sent } from './context';
 export { makeLog, type Log } from './log';
 export { shownFields, textWithLinks } from './typed';
+export { ctxOf, siteActor, writeOf } from './site';
+export { nested } from './nest';
 export { problemDetails, problemResponse, type ProblemDetails } from './problem';
