@@ -80,10 +80,10 @@ export const DEVICE_PARAMETERS: readonly Parameter[] = parametersOf('judgement',
   // Devices
   [
     'conventionalBuiltUp',
-    'built-up back pressure of a conventional device',
-    '',
-    'overpressure',
-    ['overpressure', '0.05', '0.06', '0.07', '0.08', '0.09', '0.10'],
+    'built-up back pressure of a conventional device, beside its overpressure (1: the overpressure alone)',
+    'fraction of set',
+    1,
+    [0.05, 1],
     MEMORY,
   ],
   [

@@ -11,7 +11,12 @@ export const RANGES: Readonly<Record<string, RangeRow>> = Object.fromEntries(
 
 /** What a check needs from the site: its barometer, and the ranges that it has narrowed or widened. */
 export type RangeContext = { barometer?: Q; ranges?: Readonly<Record<string, Range>> };
-export type RangeCheck = { verdict: 'possible' | 'implausible' | 'impossible'; sentence?: string };
+/** `wrongUnit`: the figure is of another kind than the key; there was nothing to compare. */
+export type RangeCheck = {
+  verdict: 'possible' | 'implausible' | 'impossible';
+  sentence?: string;
+  wrongUnit?: true;
+};
 
 /** For a gauge reading against an absolute range when no site is known: the standard atmosphere, ISO 2533:1975. */
 const STANDARD_ATMOSPHERE: Q = { value: 101.325, unit: 'kPa_abs' };
@@ -75,6 +80,7 @@ export function checkRange(key: string, q: Q, context: RangeContext = {}, label?
     );
     return {
       verdict: 'impossible',
+      wrongUnit: true,
       sentence: `${name} can't be in ${unitLabel(q.unit) || 'a plain number'}; it is given in ${units.join(' or ')}.`,
     };
   }

@@ -1,6 +1,7 @@
 /* Ops: applied, refused, undone. */
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
+import { methodById } from '@engine/catalog';
 import { applyOps, canonical, getAt, invertOps, type Basis, type Op } from '@domain/basis';
 import { sample } from './sample';
 
@@ -90,6 +91,15 @@ describe('applyOps', () => {
     );
     const inside = { ...sample().equipment[0]!, id: 'eq_2', volume: { value: -1, unit: 'm3' } };
     expect(refused([{ op: 'add', path: 'equipment', value: inside }]).code).toBe('VALUE_IMPOSSIBLE');
+  });
+
+  it('knows the ranges of the inputs of a method', () => {
+    const inputs = 'scenarios/cooling-water-loss/answers/ans_1/size/inputs';
+    const name = methodById('a.gas')?.inputs.find((input) => input.rangeKey === 'molarMass')?.name ?? '';
+    const problem = refused([
+      { op: 'set', path: `${inputs}/${name}`, value: { value: 0.2, unit: 'kg/kmol' } },
+    ]);
+    expect(problem).toMatchObject({ code: 'VALUE_IMPOSSIBLE', errors: [{ path: `${inputs}/${name}` }] });
   });
 
   it('does not ask again for what stood there before', () => {

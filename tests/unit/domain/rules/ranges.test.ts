@@ -56,6 +56,7 @@ describe('checkRange', () => {
   it('refuses another kind of quantity with the units that are taken', () => {
     expect(checkRange('mdmt', { value: 3, unit: 'bar_g' })).toEqual({
       verdict: 'impossible',
+      wrongUnit: true,
       sentence: "Minimum design metal temperature can't be in barg; it is given in °C.",
     });
     expect(verdict('mdmt', 3, 'no such unit')).toBe('impossible');
