@@ -1,4 +1,4 @@
-/* What a quantity is: a number with a unit that says its dimension, gauge and absolute kept apart. */
+/* What a quantity is: a number with a unit that says its dimension, gauge and absolute kept separate. */
 
 /** A quantity as entered; `text` keeps what was typed, so that printed digits can be respected. */
 export type Q = { value: number; unit: string; text?: string };

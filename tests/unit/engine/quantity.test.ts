@@ -1,4 +1,4 @@
-/* Units: exact factors, gauge apart from absolute, readings apart from differences, sameness, printing. */
+/* Units: exact factors, gauge is not absolute, a reading is not a difference, sameness, printing. */
 import fc from 'fast-check';
 import { describe, expect, it } from 'vitest';
 import {

@@ -1,7 +1,7 @@
 /* Method a.backpressure-factor: Kb of balanced valves in gas service from the curves of the standard. */
 import { type Method } from '../../catalog/types';
 import { interpolate } from '../../numeric';
-import { workSheet } from '../../sheet';
+import { type SheetBuilder, workSheet } from '../../sheet';
 import { input, output } from '../common/describe';
 import { systemOf, SYSTEM_UNITS } from '../common/system';
 import { gaugePressure } from '../common/pressures';
@@ -25,6 +25,27 @@ export function balancedKb(percent: number, overpressure: number): number | unde
   const [first = 0, last = 0] = [row.curve.x[0], row.curve.x.at(-1)];
   if (percent < first) return 1;
   return interpolate(row.curve, Math.min(percent, last));
+}
+
+/** Reads the curve, or refuses outside of it. */
+function curveStep(sheet: SheetBuilder, percent: number, overpressure: number): number {
+  const Kb = balancedKb(percent, overpressure);
+  if (Kb === undefined) {
+    const text =
+      'The curves for Kb reach from 0 to 50 % back pressure and are drawn for 10, 16 and 21 % overpressure; use the maker’s curve outside of them.';
+    sheet.refuse('OUTSIDE_CURVE', percent > 50 || percent < 0 ? 'back_pressure' : 'overpressure', text);
+  }
+  return sheet.step(
+    {
+      key: 'Kb',
+      tex: 'K_b',
+      meaning: 'back-pressure factor read from the curve',
+      value: Kb,
+      unit: '-',
+      clause: 'API 520-1, figure for Kb',
+    },
+    (v) => `\\text{curve at } ${v('percent')}\\,\\%`,
+  );
 }
 
 /** a.backpressure-factor: Kb of a balanced valve in gas service. */
@@ -63,27 +84,7 @@ export const GAS_BACKPRESSURE: Method = {
         (v) => `100 \\cdot \\frac{${v('back_pressure')}}{${v('set_pressure')}}`,
       );
       sheet.output('gauge_back_pressure_percent', percent, '%');
-      const Kb = balancedKb(percent, overpressure);
-      if (Kb === undefined) {
-        const text =
-          'The curves for Kb reach from 0 to 50 % back pressure and are drawn for 10, 16 and 21 % overpressure; use the maker’s curve outside of them.';
-        return sheet.refuse(
-          'OUTSIDE_CURVE',
-          percent > 50 || percent < 0 ? 'back_pressure' : 'overpressure',
-          text,
-        );
-      }
-      sheet.step(
-        {
-          key: 'Kb',
-          tex: 'K_b',
-          meaning: 'back-pressure factor read from the curve',
-          value: Kb,
-          unit: '-',
-          clause: 'API 520-1, figure for Kb',
-        },
-        (v) => `\\text{curve at } ${v('percent')}\\,\\%`,
-      );
+      const Kb = curveStep(sheet, percent, overpressure);
       sheet.output('Kb', Kb);
     });
   },

@@ -1,15 +1,60 @@
 /* Method a.rated-capacity: what a valve passes by its actual area and certified coefficient. */
 import { type Method } from '../../catalog/types';
 import { convert, fromSI, unitLabel } from '../../quantity';
-import { workSheet } from '../../sheet';
+import { type SheetBuilder, type Show, workSheet } from '../../sheet';
 import { GAS_INPUTS, input, optional, output } from '../common/describe';
 import { absolutePressure, barometer, relievingAbsolute } from '../common/pressures';
-import { systemOf, SYSTEM_UNITS } from '../common/system';
-import { GAS_CONSTANT, nozzleFlux } from './flow';
+import { SYSTEM_UNITS, type System, systemOf } from '../common/system';
+import { GAS_CONSTANT, type GasState, nozzleFlux } from './flow';
 
 /** Rated gas capacity in kg/s: K · A · G, with A the actual area in m² and K the certified (derated) coefficient. */
 export function ratedCapacity(flux: number, area: number, K: number): number {
   return K * area * flux;
+}
+
+/** The gas at the nozzle in SI base units; refuses when nothing can flow. */
+function readState(sheet: SheetBuilder, system: System): GasState {
+  const unit = SYSTEM_UNITS[system].P;
+  const T = sheet.number('T', 'K', { above: 0 });
+  const Z = sheet.number('Z', '-', { above: 0 });
+  const M = sheet.number('M', 'kg/kmol', { above: 0 });
+  const k = sheet.number('k', '-', { min: 1 });
+  const relieving = relievingAbsolute(sheet, system);
+  const back = sheet.has('P2') ? absolutePressure(sheet, 'P2', 'P_2', system) : barometer(sheet, system);
+  if (back >= relieving)
+    sheet.refuse('NO_FLOW', 'P2', 'The relieving pressure is not above the back pressure: nothing can flow.');
+  return {
+    P1: convert({ value: relieving, unit }, 'Pa_abs'),
+    P2: convert({ value: back, unit }, 'Pa_abs'),
+    T,
+    Z,
+    M,
+    k,
+  };
+}
+
+/** The step of the theoretical mass flux. */
+function fluxStep(sheet: SheetBuilder, state: GasState): { flux: number; choked: boolean } {
+  const { flux, choked } = nozzleFlux(state);
+  sheet.keep('P1', state.P1, 'P_1');
+  sheet.keep('P2', state.P2, 'P_2');
+  sheet.keep('R', GAS_CONSTANT);
+  const root = (v: Show) => `\\frac{${v('M')}}{${v('Z')} \\cdot ${v('R')} \\cdot ${v('T')}}`;
+  const r = (v: Show) => `\\left(\\frac{${v('P2')}}{${v('P1')}}\\right)`;
+  sheet.step(
+    {
+      key: 'G',
+      meaning: `theoretical mass flux, ${choked ? 'choked' : 'not choked'}, in SI base units`,
+      value: flux,
+      unit: 'kg/(m2.s)',
+      clause: 'isentropic nozzle of an ideal gas',
+    },
+    (v) =>
+      choked
+        ? `${v('P1')} \\sqrt{${root(v)} \\cdot ${v('k')} \\left(\\frac{2}{${v('k')}+1}\\right)^{(${v('k')}+1)/(${v('k')}-1)}}`
+        : `${v('P1')} \\sqrt{${root(v)} \\cdot \\frac{2 \\cdot ${v('k')}}{${v('k')}-1} \\left[${r(v)}^{2/${v('k')}} - ${r(v)}^{(${v('k')}+1)/${v('k')}}\\right]}`,
+  );
+  return { flux, choked };
 }
 
 /** a.rated-capacity: rated capacity in gas service. */
@@ -47,43 +92,7 @@ export const RATED: Method = {
       const u = SYSTEM_UNITS[system];
       const A = sheet.number('A_actual', 'm2', { above: 0 }, 'A');
       const K = sheet.number('K_certified', '-', { above: 0, max: 1 }, 'K');
-      const [T, Z, M] = [
-        sheet.number('T', 'K', { above: 0 }),
-        sheet.number('Z', '-', { above: 0 }),
-        sheet.number('M', 'kg/kmol', { above: 0 }),
-      ];
-      const k = sheet.number('k', '-', { min: 1 });
-      const P1 = convert({ value: relievingAbsolute(sheet, system), unit: u.P }, 'Pa_abs');
-      const P2 = convert(
-        {
-          value: sheet.has('P2') ? absolutePressure(sheet, 'P2', 'P_2', system) : barometer(sheet, system),
-          unit: u.P,
-        },
-        'Pa_abs',
-      );
-      if (P2 >= P1)
-        sheet.refuse(
-          'NO_FLOW',
-          'P2',
-          'The relieving pressure is not above the back pressure: nothing can flow.',
-        );
-      const { flux, choked } = nozzleFlux({ P1, P2, T, Z, M, k });
-      sheet.keep('P1', P1, 'P_1');
-      sheet.keep('P2', P2, 'P_2');
-      sheet.keep('R', GAS_CONSTANT);
-      sheet.step(
-        {
-          key: 'G',
-          meaning: `theoretical mass flux, ${choked ? 'choked' : 'not choked'}, in SI base units`,
-          value: flux,
-          unit: 'kg/(m2.s)',
-          clause: 'isentropic nozzle of an ideal gas',
-        },
-        (v) =>
-          choked
-            ? `${v('P1')} \\sqrt{\\frac{${v('M')}}{${v('Z')} ${v('R')} ${v('T')}}\\, ${v('k')} \\left(\\frac{2}{${v('k')}+1}\\right)^{(${v('k')}+1)/(${v('k')}-1)}}`
-            : `${v('P1')} \\sqrt{\\frac{${v('M')}}{${v('Z')} ${v('R')} ${v('T')}} \\frac{2 ${v('k')}}{${v('k')}-1} \\left[\\left(\\frac{${v('P2')}}{${v('P1')}}\\right)^{2/${v('k')}} - \\left(\\frac{${v('P2')}}{${v('P1')}}\\right)^{(${v('k')}+1)/${v('k')}}\\right]}`,
-      );
+      const { flux, choked } = fluxStep(sheet, readState(sheet, system));
       const W = fromSI(ratedCapacity(flux, A, K), u.W).value;
       sheet.step(
         { key: 'W', tex: 'W_{rated}', meaning: 'rated capacity', value: W, unit: u.W },

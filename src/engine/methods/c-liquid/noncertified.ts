@@ -1,13 +1,43 @@
 /* Method c.liquid-noncertified: liquid relief through valves that need no capacity certification. */
 import { type Method } from '../../catalog/types';
-import { workSheet } from '../../sheet';
+import { type SheetBuilder, workSheet } from '../../sheet';
 import { input, optional, output } from '../common/describe';
 import { letterStep } from '../common/letter-step';
-import { SYSTEM_UNITS, systemOf } from '../common/system';
+import { SYSTEM_UNITS, type System, systemOf } from '../common/system';
 import { nonCertifiedArea } from './flow';
 import { readFlow } from './read-flow';
 
 const CLAUSE = 'API 520-1, sizing for liquid relief, valves not requiring capacity certification';
+
+type Flow = Parameters<typeof nonCertifiedArea>[0];
+
+/** The coefficient and the correction factors. */
+function readFactors(sheet: SheetBuilder): Pick<Flow, 'Kd' | 'Kw' | 'Kc' | 'Kv' | 'Kp'> {
+  const share = { above: 0, max: 1 };
+  return {
+    Kp: sheet.number('Kp', '-', share, 'K_p'),
+    Kd: sheet.number('Kd', '-', { ...share, fallback: 0.62 }, 'K_d'),
+    Kw: sheet.number('Kw', '-', { ...share, fallback: 1 }, 'K_w'),
+    Kc: sheet.number('Kc', '-', { ...share, fallback: 1 }, 'K_c'),
+    Kv: sheet.number('Kv', '-', { ...share, fallback: 1 }, 'K_v'),
+  };
+}
+
+function areaStep(sheet: SheetBuilder, flow: Flow, system: System): number {
+  const value = nonCertifiedArea(flow, system);
+  const unit = SYSTEM_UNITS[system].A;
+  return sheet.step(
+    { key: 'A', meaning: 'required effective area', value, unit, clause: CLAUSE, memory: true },
+    (v) => {
+      const factors = ['Kd', 'Kw', 'Kc', 'Kv', 'Kp'].map(v).join(' \\cdot ');
+      const front =
+        system === 'SI'
+          ? `\\frac{11.78 \\cdot ${v('Q')}}{${factors}}`
+          : `\\frac{${v('Q')}}{38 \\cdot ${factors}}`;
+      return `${front} \\sqrt{\\frac{${v('G')}}{1.25 \\cdot ${v('set_pressure')} - ${v('back_pressure')}}}`;
+    },
+  );
+}
 
 /** c.liquid-noncertified: the older liquid equation with 25 % overpressure basis and Kp. */
 export const LIQUID_NONCERTIFIED: Method = {
@@ -42,43 +72,17 @@ export const LIQUID_NONCERTIFIED: Method = {
   work(inputs, edition) {
     return workSheet(this, inputs, edition, (sheet) => {
       const system = systemOf(inputs, ['Q', 'W', 'set_pressure']);
-      const u = SYSTEM_UNITS[system];
       const { Q, G } = readFlow(sheet, system);
-      const set = sheet.number('set_pressure', u.Pg, { above: 0 }, 'p');
-      const back = sheet.number('back_pressure', u.Pg, { fallback: 0 }, 'p_b');
+      const set = sheet.number('set_pressure', SYSTEM_UNITS[system].Pg, { above: 0 }, 'p');
+      const back = sheet.number('back_pressure', SYSTEM_UNITS[system].Pg, { fallback: 0 }, 'p_b');
       if (back >= 1.25 * set)
         sheet.refuse(
           'NO_FLOW',
           'back_pressure',
           'The back pressure is not below 1.25 times the set pressure: nothing can flow.',
         );
-      const factor = (name: string, tex: string, fallback?: number) =>
-        sheet.number(
-          name,
-          '-',
-          fallback === undefined ? { above: 0, max: 1 } : { above: 0, max: 1, fallback },
-          tex,
-        );
-      const Kp = factor('Kp', 'K_p');
-      const [Kd, Kw, Kc, Kv] = [
-        factor('Kd', 'K_d', 0.62),
-        factor('Kw', 'K_w', 1),
-        factor('Kc', 'K_c', 1),
-        factor('Kv', 'K_v', 1),
-      ];
-      const value = nonCertifiedArea({ Q, G, set, back, Kd, Kw, Kc, Kv, Kp }, system);
-      const area = sheet.step(
-        { key: 'A', meaning: 'required effective area', value, unit: u.A, clause: CLAUSE, memory: true },
-        (v) => {
-          const factors = ['Kd', 'Kw', 'Kc', 'Kv', 'Kp'].map(v).join(' \\cdot ');
-          const front =
-            system === 'SI'
-              ? `\\frac{11.78 \\cdot ${v('Q')}}{${factors}}`
-              : `\\frac{${v('Q')}}{38 \\cdot ${factors}}`;
-          return `${front} \\sqrt{\\frac{${v('G')}}{1.25 \\cdot ${v('set_pressure')} - ${v('back_pressure')}}}`;
-        },
-      );
-      sheet.output('A_required', area, u.A);
+      const area = areaStep(sheet, { Q, G, set, back, ...readFactors(sheet) }, system);
+      sheet.output('A_required', area, SYSTEM_UNITS[system].A);
       letterStep(sheet, area, system);
     });
   },

@@ -8,6 +8,7 @@ import {
   type LiquidFlow,
   liquidReynolds,
   type Viscosity,
+  type ViscousResult,
   viscousArea,
 } from './flow';
 
@@ -25,6 +26,59 @@ const KV_TEX: Record<KvFormula, (Re: string) => string> = {
   '7E-9E': (Re) => `\\left(0.9935 + \\frac{2.878}{${Re}^{0.5}} + \\frac{342.75}{${Re}^{1.5}}\\right)^{-1}`,
 };
 
+/** The factor at the pass's Reynolds number and the area with it. */
+function correctedSteps(sheet: SheetBuilder, pass: ViscousResult, formula: KvFormula, system: System): void {
+  sheet.step(
+    {
+      key: 'Kv',
+      tex: 'K_v',
+      meaning: `viscosity factor, ${formula} formula`,
+      value: pass.Kv,
+      unit: '-',
+      clause: `${CLAUSE}, Kv`,
+    },
+    (v) => KV_TEX[formula](v('Re')),
+  );
+  sheet.step(
+    {
+      key: 'A',
+      meaning: 'required effective area with viscosity',
+      value: pass.area,
+      unit: SYSTEM_UNITS[system].A,
+      clause: CLAUSE,
+    },
+    (v) => `\\frac{${v('A_R')}}{${v('Kv')}}`,
+  );
+}
+
+/** One pass: Reynolds number, factor, area. */
+function passSteps(
+  sheet: SheetBuilder,
+  pass: ViscousResult,
+  formula: KvFormula,
+  saybolt: boolean,
+  system: System,
+): void {
+  const form = LIQUID_FORMS[system];
+  sheet.keep('A_sel', pass.selected, 'A_{sel}');
+  const name = pass.letter === undefined ? 'area' : `letter ${pass.letter}`;
+  const susTex = (v: (key: string) => string) =>
+    `\\frac{${form.sus} \\cdot ${v('Q')}}{${v('viscosity')} \\sqrt{${v('A_sel')}}}`;
+  const cPTex = (v: (key: string) => string) =>
+    `\\frac{${v('Q')} \\cdot ${form.cP} \\cdot ${v('G')}}{${v('mu')} \\sqrt{${v('A_sel')}}}`;
+  sheet.step(
+    {
+      key: 'Re',
+      meaning: `Reynolds number at the selected ${name}`,
+      value: pass.Re,
+      unit: '-',
+      clause: CLAUSE,
+    },
+    saybolt ? susTex : cPTex,
+  );
+  correctedSteps(sheet, pass, formula, system);
+}
+
 /** Works the procedure by one formula; with `shown` every pass becomes steps of the sheet. */
 function viscosityPasses(
   sheet: SheetBuilder,
@@ -35,50 +89,12 @@ function viscosityPasses(
   system: System,
   shown: boolean,
 ): { Re: number; Kv: number; area: number } {
-  const u = SYSTEM_UNITS[system];
-  const form = LIQUID_FORMS[system];
   const Re = (area: number) => liquidReynolds(flow.Q, flow.G, viscosity, area, system);
   const { passes, converged } = viscousArea(bare, Re, formula, system);
   if (!converged)
     sheet.warn('NOT_CONVERGED', 'The viscosity iteration above letter T did not settle in 100 passes.');
   for (const pass of shown ? passes : []) {
-    sheet.keep('A_sel', pass.selected, 'A_{sel}');
-    const name = pass.letter === undefined ? 'area' : `letter ${pass.letter}`;
-    const susTex = (v: (key: string) => string) =>
-      `\\frac{${form.sus} \\cdot ${v('Q')}}{${v('viscosity')} \\sqrt{${v('A_sel')}}}`;
-    const cPTex = (v: (key: string) => string) =>
-      `\\frac{${v('Q')} \\cdot ${form.cP} \\cdot ${v('G')}}{${v('mu')} \\sqrt{${v('A_sel')}}}`;
-    sheet.step(
-      {
-        key: 'Re',
-        meaning: `Reynolds number at the selected ${name}`,
-        value: pass.Re,
-        unit: '-',
-        clause: CLAUSE,
-      },
-      'sus' in viscosity ? susTex : cPTex,
-    );
-    sheet.step(
-      {
-        key: 'Kv',
-        tex: 'K_v',
-        meaning: `viscosity factor, ${formula} formula`,
-        value: pass.Kv,
-        unit: '-',
-        clause: `${CLAUSE}, Kv`,
-      },
-      (v) => KV_TEX[formula](v('Re')),
-    );
-    sheet.step(
-      {
-        key: 'A',
-        meaning: 'required effective area with viscosity',
-        value: pass.area,
-        unit: u.A,
-        clause: CLAUSE,
-      },
-      (v) => `\\frac{${v('A_R')}}{${v('Kv')}}`,
-    );
+    passSteps(sheet, pass, formula, 'sus' in viscosity, system);
   }
   const last = passes.at(-1);
   if (!last) sheet.refuse('NO_RESULT', 'mu', 'The viscosity procedure found no area.');

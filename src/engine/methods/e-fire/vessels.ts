@@ -8,6 +8,7 @@ import {
   type Heads,
   ORIENTATIONS,
   type Orientation,
+  type Vessel,
   vesselHeight,
   wettedArea,
 } from './geometry';
@@ -62,6 +63,58 @@ function label(sheet: SheetBuilder, n: number): string {
   return typeof tag === 'string' ? tag : `vessel ${n}`;
 }
 
+/** The height of one vessel that the fire wets. */
+function heightStep(
+  sheet: SheetBuilder,
+  n: number,
+  vessel: Vessel,
+  name: string,
+  height: number,
+  unit: string,
+): void {
+  sheet.keep('R', fromSI(vessel.D / 2, unit).value, `\\tfrac{1}{2}D_{${n}}`);
+  sheet.step(
+    {
+      key: `he_${n}`,
+      tex: `h_{e${n}}`,
+      meaning: `wetted height of ${name} that the fire reaches`,
+      value: height,
+      unit,
+      clause: CLAUSE,
+    },
+    (v) => {
+      const reach = `${v('fire_height')} - ${v(named('elevation_of_bottom', n))}`;
+      const cap = vessel.orientation === 'sphere' ? `\\max(${v('R')},\\ ${reach})` : reach;
+      return `\\max(0,\\ \\min(${v(named('liquid_level', n))},\\ ${cap}))`;
+    },
+  );
+}
+
+/** Its wetted area. */
+function areaStep(
+  sheet: SheetBuilder,
+  n: number,
+  vessel: Vessel,
+  name: string,
+  area: number,
+  unit: string,
+): void {
+  sheet.step(
+    {
+      key: `A_${n}`,
+      tex: `A_{${n}}`,
+      meaning: `wetted area of ${name}, ${describe(vessel.orientation, vessel.heads)}`,
+      value: area,
+      unit,
+      clause: 'exact geometry of shell and heads',
+    },
+    (v) =>
+      vessel.orientation === 'sphere'
+        ? `\\pi \\cdot ${v(named('D', n))} \\cdot ${v(`he_${n}`)}`
+        : `A_{shell+heads}(${v(named('D', n))},\\ ${v(named('L', n))},\\ ${v(`he_${n}`)})`,
+  );
+}
+
 /** The steps of one vessel; its wetted area in the system's unit. */
 function vesselSteps(sheet: SheetBuilder, n: number, fireHeight: number, system: System): number {
   const u = SYSTEM_UNITS[system];
@@ -76,37 +129,9 @@ function vesselSteps(sheet: SheetBuilder, n: number, fireHeight: number, system:
     );
   const si = effectiveHeight(vessel, { level, elevation, fireHeight });
   const height = fromSI(si, u.L).value;
-  sheet.keep('R', fromSI(vessel.D / 2, u.L).value, `\\tfrac{1}{2}D_{${n}}`);
-  sheet.step(
-    {
-      key: `he_${n}`,
-      tex: `h_{e${n}}`,
-      meaning: `wetted height of ${name} that the fire reaches`,
-      value: height,
-      unit: u.L,
-      clause: CLAUSE,
-    },
-    (v) => {
-      const reach = `${v('fire_height')} - ${v(named('elevation_of_bottom', n))}`;
-      const cap = vessel.orientation === 'sphere' ? `\\max(${v('R')},\\ ${reach})` : reach;
-      return `\\max(0,\\ \\min(${v(named('liquid_level', n))},\\ ${cap}))`;
-    },
-  );
+  heightStep(sheet, n, vessel, name, height, u.L);
   const area = fromSI(wettedArea(vessel, si), u.area).value;
-  sheet.step(
-    {
-      key: `A_${n}`,
-      tex: `A_{${n}}`,
-      meaning: `wetted area of ${name}, ${describe(vessel.orientation, vessel.heads)}`,
-      value: area,
-      unit: u.area,
-      clause: 'exact geometry of shell and heads',
-    },
-    (v) =>
-      vessel.orientation === 'sphere'
-        ? `\\pi \\cdot ${v(named('D', n))} \\cdot ${v(`he_${n}`)}`
-        : `A_{shell+heads}(${v(named('D', n))},\\ ${v(named('L', n))},\\ ${v(`he_${n}`)})`,
-  );
+  areaStep(sheet, n, vessel, name, area, u.area);
   sheet.output(n === 1 ? 'effective_wetted_height' : `effective_wetted_height_${n}`, height, u.L);
   sheet.output(`wetted_area_${n}`, area, u.area);
   if (si === 0 && level > 0)

@@ -11,6 +11,7 @@ import {
   gasThrough,
   type ValveGas,
 } from './control-valve';
+import { fittingSteps, velocityTex } from './fitting-steps';
 import { readCoefficient, readFittings, readPressures, readType, VALVE_INPUTS } from './valve-inputs';
 
 const CLAUSE = 'IEC 60534-2-1:2011, compressible fluids';
@@ -27,49 +28,29 @@ function readGas(sheet: SheetBuilder): ValveGas {
   return { ...readPressures(sheet), T, Z, M, k, xT };
 }
 
-/** The steps of one gas flow through a known coefficient; gives all outputs but the inverse. */
-function flowSteps(
-  sheet: SheetBuilder,
-  gas: ValveGas,
-  C: number,
-  type: CoefficientType,
-  fittings: Fittings | undefined,
-): void {
-  const r = gasThrough(gas, C, type, fittings);
+type Through = ReturnType<typeof gasThrough>;
+
+/** The fittings and the pressure ratio factor xTP with them. */
+function ratioStep(sheet: SheetBuilder, r: Through, type: CoefficientType, fittings: Fittings): void {
+  fittingSteps(sheet, r.FP, type, fittings);
   sheet.step(
-    { key: 'x', meaning: 'ratio of pressure drop to inlet pressure', value: r.x, unit: '-', clause: CLAUSE },
-    (v) => `\\frac{${v('P1')} - ${v('P2')}}{${v('P1')}}`,
+    {
+      key: 'xTP',
+      tex: 'x_{TP}',
+      meaning: 'pressure ratio factor with fittings',
+      value: r.xTP,
+      unit: '-',
+      clause: CLAUSE,
+      memory: true,
+    },
+    (v) =>
+      `\\frac{${v('xT')}/${v('FP')}^2}{1 + \\frac{${v('xT')} \\cdot ${v('zi')}}{${COEFFICIENTS[type].N5}} ${velocityTex(v)}}`,
   );
-  if (fittings) {
-    sheet.step(
-      {
-        key: 'FP',
-        tex: 'F_P',
-        meaning: 'piping geometry factor',
-        value: r.FP,
-        unit: '-',
-        clause: CLAUSE,
-        memory: true,
-      },
-      () => `\\left[1 + \\frac{\\Sigma\\zeta}{N_2}\\left(\\frac{C}{d^2}\\right)^2\\right]^{-1/2}`,
-    );
-    sheet.step(
-      {
-        key: 'xTP',
-        tex: 'x_{TP}',
-        meaning: 'pressure ratio factor with fittings',
-        value: r.xTP,
-        unit: '-',
-        clause: CLAUSE,
-        memory: true,
-      },
-      (v) =>
-        `\\frac{${v('xT')}/${v('FP')}^2}{1 + \\frac{${v('xT')}\\,\\zeta_i}{N_5}\\left(\\frac{C}{d^2}\\right)^2}`,
-    );
-    sheet.output('FP', r.FP);
-    sheet.output('xTP', r.xTP);
-  }
-  const ratio = fittings ? 'xTP' : 'xT';
+  sheet.output('xTP', r.xTP);
+}
+
+/** Where the valve chokes, and the expansion factor. */
+function expansionSteps(sheet: SheetBuilder, r: Through, ratio: 'xT' | 'xTP'): void {
   sheet.step(
     {
       key: 'xc',
@@ -92,15 +73,32 @@ function flowSteps(
     },
     (v) => `1 - \\frac{${v('xs')}}{3 \\cdot ${v('xc')}}`,
   );
+  sheet.output('x_choked', r.xChoked);
+  sheet.output('choked', r.choked);
+  sheet.output('Y', r.Y);
+}
+
+/** The steps of one gas flow through a known coefficient; gives all outputs but the inverse. */
+function flowSteps(
+  sheet: SheetBuilder,
+  gas: ValveGas,
+  C: number,
+  type: CoefficientType,
+  fittings: Fittings | undefined,
+): void {
+  const r = gasThrough(gas, C, type, fittings);
+  sheet.step(
+    { key: 'x', meaning: 'ratio of pressure drop to inlet pressure', value: r.x, unit: '-', clause: CLAUSE },
+    (v) => `\\frac{${v('P1')} - ${v('P2')}}{${v('P1')}}`,
+  );
+  if (fittings) ratioStep(sheet, r, type, fittings);
+  expansionSteps(sheet, r, fittings ? 'xTP' : 'xT');
   sheet.step(
     { key: 'W', meaning: 'mass flow', value: r.W, unit: 'kg/h', clause: CLAUSE, memory: true },
     (v) =>
       `${v('coefficient')} \\cdot ${COEFFICIENTS[type].N8} \\cdot ${fittings ? `${v('FP')} \\cdot ` : ''}${v('P1')} \\cdot ${v('Y')} \\sqrt{\\frac{${v('xs')} \\cdot ${v('M')}}{${v('T')} \\cdot ${v('Z')}}}`,
   );
   sheet.output('x', r.x);
-  sheet.output('x_choked', r.xChoked);
-  sheet.output('choked', r.choked);
-  sheet.output('Y', r.Y);
   sheet.output('W', r.W, 'kg/h');
 }
 

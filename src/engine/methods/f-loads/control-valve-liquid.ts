@@ -13,6 +13,7 @@ import {
   REFERENCE_WATER,
   type ValveLiquid,
 } from './control-valve';
+import { fittingSteps, velocityTex } from './fitting-steps';
 import { readCoefficient, readFittings, readPressures, readType, VALVE_INPUTS } from './valve-inputs';
 
 const CLAUSE = 'IEC 60534-2-1:2011, incompressible fluids';
@@ -32,55 +33,44 @@ function readLiquid(sheet: SheetBuilder): ValveLiquid {
   return { ...pressures, rho, Pv, Pc, FL };
 }
 
-/** Factors and choking, then the flow. */
-function flowSteps(
-  sheet: SheetBuilder,
-  liquid: ValveLiquid,
-  C: number,
-  type: CoefficientType,
-  fittings: Fittings | undefined,
-): void {
-  const r = liquidThrough(liquid, C, type, fittings);
+type Through = ReturnType<typeof liquidThrough>;
+
+function criticalStep(sheet: SheetBuilder, FF: number): void {
   sheet.step(
     {
       key: 'FF',
       tex: 'F_F',
       meaning: 'critical pressure ratio factor of the liquid',
-      value: r.FF,
+      value: FF,
       unit: '-',
       clause: CLAUSE,
     },
     (v) => `0.96 - 0.28 \\sqrt{\\frac{${v('Pv')}}{${v('Pc')}}}`,
   );
-  if (fittings) {
-    sheet.step(
-      {
-        key: 'FP',
-        tex: 'F_P',
-        meaning: 'piping geometry factor',
-        value: r.FP,
-        unit: '-',
-        clause: CLAUSE,
-        memory: true,
-      },
-      () => `\\left[1 + \\frac{\\Sigma\\zeta}{N_2}\\left(\\frac{C}{d^2}\\right)^2\\right]^{-1/2}`,
-    );
-    sheet.step(
-      {
-        key: 'FLP',
-        tex: 'F_{LP}',
-        meaning: 'recovery factor with fittings',
-        value: r.FLP,
-        unit: '-',
-        clause: CLAUSE,
-        memory: true,
-      },
-      (v) =>
-        `${v('FL')} \\left[1 + \\frac{${v('FL')}^2\\,\\zeta_1}{N_2}\\left(\\frac{C}{d^2}\\right)^2\\right]^{-1/2}`,
-    );
-    sheet.output('FP', r.FP);
-    sheet.output('FLP', r.FLP);
-  }
+  sheet.output('FF', FF);
+}
+
+/** The fittings and the recovery factor FLP with them. */
+function recoveryStep(sheet: SheetBuilder, r: Through, type: CoefficientType, fittings: Fittings): void {
+  fittingSteps(sheet, r.FP, type, fittings);
+  sheet.step(
+    {
+      key: 'FLP',
+      tex: 'F_{LP}',
+      meaning: 'recovery factor with fittings',
+      value: r.FLP,
+      unit: '-',
+      clause: CLAUSE,
+      memory: true,
+    },
+    (v) =>
+      `${v('FL')} \\left[1 + \\frac{${v('FL')}^2 \\cdot ${v('zi')}}{${COEFFICIENTS[type].N2}} ${velocityTex(v)}\\right]^{-1/2}`,
+  );
+  sheet.output('FLP', r.FLP);
+}
+
+/** The drop at which the valve chokes. */
+function chokeStep(sheet: SheetBuilder, r: Through, fitted: boolean): void {
   sheet.step(
     {
       key: 'dpc',
@@ -91,8 +81,24 @@ function flowSteps(
       clause: CLAUSE,
     },
     (v) =>
-      `${fittings ? `\\left(\\frac{${v('FLP')}}{${v('FP')}}\\right)^2` : `${v('FL')}^2`} (${v('P1')} - ${v('FF')} \\cdot ${v('Pv')})`,
+      `${fitted ? `\\left(\\frac{${v('FLP')}}{${v('FP')}}\\right)^2` : `${v('FL')}^2`} (${v('P1')} - ${v('FF')} \\cdot ${v('Pv')})`,
   );
+  sheet.output('choked_pressure_drop', r.chokedDrop, 'kPa');
+  sheet.output('choked', r.choked);
+}
+
+/** Factors and choking, then the flow. */
+function flowSteps(
+  sheet: SheetBuilder,
+  liquid: ValveLiquid,
+  C: number,
+  type: CoefficientType,
+  fittings: Fittings | undefined,
+): void {
+  const r = liquidThrough(liquid, C, type, fittings);
+  criticalStep(sheet, r.FF);
+  if (fittings) recoveryStep(sheet, r, type, fittings);
+  chokeStep(sheet, r, fittings !== undefined);
   sheet.keep('dps', r.drop, r.choked ? '\\Delta P_{choked}' : '(P_1 - P_2)');
   sheet.keep('rho0', REFERENCE_WATER, '\\rho_0');
   sheet.step(
@@ -111,9 +117,6 @@ function flowSteps(
     { key: 'W', meaning: 'mass flow', value: r.Q * liquid.rho, unit: 'kg/h' },
     (v) => `${v('rho')} \\cdot ${v('Q')}`,
   );
-  sheet.output('FF', r.FF);
-  sheet.output('choked_pressure_drop', r.chokedDrop, 'kPa');
-  sheet.output('choked', r.choked);
   sheet.output('Q', r.Q, 'm3/h');
   sheet.output('W', r.Q * liquid.rho, 'kg/h');
   const unit = sheet.quantity('rho').unit.startsWith('lb') ? 'lb/h' : 'kg/h';
@@ -136,17 +139,7 @@ function requiredSteps(
       `No coefficient passes this flow with these fittings. ${search.reason}`,
     );
   const { FF, choked } = liquidThrough(liquid, search.x, type, fittings);
-  sheet.step(
-    {
-      key: 'FF',
-      tex: 'F_F',
-      meaning: 'critical pressure ratio factor of the liquid',
-      value: FF,
-      unit: '-',
-      clause: CLAUSE,
-    },
-    (v) => `0.96 - 0.28 \\sqrt{\\frac{${v('Pv')}}{${v('Pc')}}}`,
-  );
+  criticalStep(sheet, FF);
   sheet.step(
     {
       key: 'K',
@@ -158,7 +151,6 @@ function requiredSteps(
     },
     (v) => `\\text{root of } Q(C) = ${v('Q')}`,
   );
-  sheet.output('FF', FF);
   sheet.output('choked', choked);
   sheet.output('Kv_required', type === 'Kv' ? search.x : search.x * 0.865, 'm3/h');
 }

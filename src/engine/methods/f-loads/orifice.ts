@@ -80,7 +80,7 @@ function gasSteps(sheet: SheetBuilder, high: number, low: number): number {
     (v) =>
       choked
         ? `${front(v)} \\, ${v('k')} \\left(\\frac{2}{${v('k')}+1}\\right)^{(${v('k')}+1)/(${v('k')}-1)}}`
-        : `${front(v)} \\frac{2 ${v('k')}}{${v('k')}-1} \\left[${r(v)}^{2/${v('k')}} - ${r(v)}^{(${v('k')}+1)/${v('k')}}\\right]}`,
+        : `${front(v)} \\frac{2 \\cdot ${v('k')}}{${v('k')}-1} \\left[${r(v)}^{2/${v('k')}} - ${r(v)}^{(${v('k')}+1)/${v('k')}}\\right]}`,
   );
 }
 

@@ -31,6 +31,24 @@ function limitTex(p: string, limitClass: LimitClass, options: LimitOptions): str
   return floor === 0 ? `${factor} \\cdot ${p}` : `\\max(${factor} \\cdot ${p},\\ ${p} + ${floor})`;
 }
 
+/** What the limit leaves above the set pressure, where one is given. */
+function overpressureStep(sheet: SheetBuilder, limit: number, limitClass: LimitClass, system: System): void {
+  const u = SYSTEM_UNITS[system];
+  if (!sheet.has('set_pressure')) return;
+  const set = sheet.number('set_pressure', u.Pg, { above: 0 }, 'p_{set}');
+  const allowed = sheet.step(
+    {
+      key: `over_${limitClass}`,
+      tex: `\\Delta p_{${limitClass}}`,
+      meaning: `allowable overpressure, ${limitClass}`,
+      value: limit - set,
+      unit: u.dP,
+    },
+    (v) => `${v(`maap_${limitClass}`)} - ${v('set_pressure')}`,
+  );
+  sheet.output(`allowable_overpressure_${limitClass}`, allowed, u.dP);
+}
+
 /** Limit, relieving pressure and allowable overpressure of one class. */
 function classSteps(
   sheet: SheetBuilder,
@@ -65,19 +83,7 @@ function classSteps(
     (v) => `${v(`maap_${limitClass}`)} + ${v('atmospheric_pressure')}`,
   );
   sheet.output(`relieving_pressure_${limitClass}`, absolute, u.P);
-  if (!sheet.has('set_pressure')) return;
-  const set = sheet.number('set_pressure', u.Pg, { above: 0 }, 'p_{set}');
-  const allowed = sheet.step(
-    {
-      key: `over_${limitClass}`,
-      tex: `\\Delta p_{${limitClass}}`,
-      meaning: `allowable overpressure, ${limitClass}`,
-      value: limit - set,
-      unit: u.dP,
-    },
-    (v) => `${v(`maap_${limitClass}`)} - ${v('set_pressure')}`,
-  );
-  sheet.output(`allowable_overpressure_${limitClass}`, allowed, u.dP);
+  overpressureStep(sheet, limit, limitClass, system);
 }
 
 /** The relieving pressure of the class asked for: the lower of the limit on the MAWP and on the highest set pressure. */

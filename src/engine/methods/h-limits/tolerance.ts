@@ -13,6 +13,32 @@ import {
   type ValveType,
 } from './limits';
 
+/** The lowest and highest opening that the tolerance allows. */
+function bandSteps(sheet: SheetBuilder, set: number, tolerance: number, unit: string): void {
+  sheet.step(
+    {
+      key: 'min',
+      tex: 'p_{min}',
+      meaning: 'lowest opening within the tolerance',
+      value: set - tolerance,
+      unit,
+    },
+    (v) => `${v('set_pressure')} - ${v('tol')}`,
+  );
+  sheet.step(
+    {
+      key: 'max',
+      tex: 'p_{max}',
+      meaning: 'highest opening within the tolerance',
+      value: set + tolerance,
+      unit,
+    },
+    (v) => `${v('set_pressure')} + ${v('tol')}`,
+  );
+  sheet.output('set_min', set - tolerance, unit);
+  sheet.output('set_max', set + tolerance, unit);
+}
+
 /** The tolerance and the band it makes. */
 function toleranceSteps(sheet: SheetBuilder, set: number, system: System, basis: CodeBasis): void {
   const u = SYSTEM_UNITS[system];
@@ -37,29 +63,8 @@ function toleranceSteps(sheet: SheetBuilder, set: number, system: System, basis:
     },
     (v) => rule(v('set_pressure')),
   );
-  sheet.step(
-    {
-      key: 'min',
-      tex: 'p_{min}',
-      meaning: 'lowest opening within the tolerance',
-      value: set - tolerance,
-      unit: u.Pg,
-    },
-    (v) => `${v('set_pressure')} - ${v('tol')}`,
-  );
-  sheet.step(
-    {
-      key: 'max',
-      tex: 'p_{max}',
-      meaning: 'highest opening within the tolerance',
-      value: set + tolerance,
-      unit: u.Pg,
-    },
-    (v) => `${v('set_pressure')} + ${v('tol')}`,
-  );
   sheet.output('set_tolerance', tolerance, u.dP);
-  sheet.output('set_min', set - tolerance, u.Pg);
-  sheet.output('set_max', set + tolerance, u.Pg);
+  bandSteps(sheet, set, tolerance, u.Pg);
 }
 
 function reseatSteps(sheet: SheetBuilder, set: number, system: System): void {

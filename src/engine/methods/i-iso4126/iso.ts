@@ -63,7 +63,7 @@ function factorSteps(sheet: SheetBuilder, k: number, p0: number, pb: number): { 
       const r = `\\left(\\frac{${v('pb')}}{${v('p0')}}\\right)`;
       return value === 1
         ? '1'
-        : `\\sqrt{\\frac{\\frac{2 ${v('k')}}{${v('k')}-1} \\left[${r}^{2/${v('k')}} - ${r}^{(${v('k')}+1)/${v('k')}}\\right]}{${v('k')} \\left(\\frac{2}{${v('k')}+1}\\right)^{(${v('k')}+1)/(${v('k')}-1)}}}`;
+        : `\\sqrt{\\frac{\\frac{2 \\cdot ${v('k')}}{${v('k')}-1} \\left[${r}^{2/${v('k')}} - ${r}^{(${v('k')}+1)/${v('k')}}\\right]}{${v('k')} \\left(\\frac{2}{${v('k')}+1}\\right)^{(${v('k')}+1)/(${v('k')}-1)}}}`;
     },
   );
   sheet.output('C', C);
