@@ -5,7 +5,7 @@ import { type Failed, fail } from '@domain/result';
 /** Failures of one account before it rests. */
 export const TRIES_PER_ACCOUNT = 5;
 /** Failures from one address, whatever the accounts, before it rests. */
-export const TRIES_PER_ADDRESS = 40;
+export const TRIES_PER_ADDRESS = 60;
 /** How long either rests, seconds. */
 export const REST_SECONDS = 15 * 60;
 

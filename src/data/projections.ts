@@ -1,6 +1,7 @@
 /* Writes the registers: one document and truth at a time, replaced as a whole; and what depends on a tag. */
 import { type Id, type Instant } from '@domain/case';
 import { type Db } from './connection';
+import { sightingsOf } from './field';
 import { findAll, insertMany, type New } from './mapping';
 import { P_DEPENDS, type DependRow, REGISTERS, type Truth } from './tables/registers';
 import { type RegisterRows } from './registers';
@@ -19,7 +20,19 @@ export async function clearProjection(trx: Db, documentId: Id, truth: Truth): Pr
   await trx(P_DEPENDS.name).where(where).delete();
 }
 
-/** Replaces a document's rows of one truth in every register. */
+type Condition = NonNullable<Projection['conditions']>[number];
+
+/** Field conditions with when each was last seen, which the document does not know. */
+async function withSightings(trx: Db, documentId: Id, rows: readonly Condition[]): Promise<Condition[]> {
+  if (rows.length === 0) return [];
+  const last = new Map((await sightingsOf(trx, documentId)).map((sighting) => [sighting.condition, sighting]));
+  return rows.map((row) => {
+    const { at, agrees } = last.get(row.elementId) ?? { at: null, agrees: null };
+    return { seenAt: at, agrees, ...row };
+  });
+}
+
+/** Replaces a document's rows of one truth in every register; field conditions keep when they were last seen. */
 export async function writeProjection(
   trx: Db,
   documentId: Id,
@@ -27,8 +40,10 @@ export async function writeProjection(
   projection: Projection,
 ): Promise<void> {
   await clearProjection(trx, documentId, truth);
+  const conditions = await withSightings(trx, documentId, projection.conditions ?? []);
   for (const name of NAMES) {
-    const rows = (projection[name] ?? []).map((row) => ({ ...row, documentId, truth }));
+    const given = name === 'conditions' ? conditions : (projection[name] ?? []);
+    const rows = given.map((row) => ({ ...row, documentId, truth }));
     await insertMany(trx, REGISTERS[name].table as never, rows as never);
   }
   const depends = (projection.depends ?? []).map((row) => ({ ...row, documentId, truth }));

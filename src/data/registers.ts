@@ -65,11 +65,13 @@ export function hasColumn(name: RegisterName, column: string): boolean {
   return (REGISTERS[name].columns as readonly string[]).includes(column);
 }
 
-/** The register's table with the results of hidden documents emptied. */
-function source(db: Db, name: RegisterName, query: RegisterQuery) {
+/** The register's table, of a site or of some documents, with the results of hidden documents emptied. */
+function source(db: Db, name: RegisterName, query: RegisterQuery, documents?: readonly Id[]) {
   const register = REGISTERS[name] as unknown as Register<RegisterHead>;
   const hidden = [...(query.hidden ?? [])];
-  const base = db(register.table.name).where({ site_id: query.siteId, truth: query.truth ?? 'in-force' });
+  const base = db(register.table.name).where({ truth: query.truth ?? 'in-force' });
+  if (documents) void base.whereIn('document_id', documents);
+  else void base.where({ site_id: query.siteId });
   if (hidden.length === 0) return base.select('*', db.raw('0 as hidden'));
   const listed = hidden.map(() => '?').join(', ');
   const emptied = register.results.map((column) =>
@@ -116,7 +118,8 @@ function readMark(cursor: string | undefined): Mark | undefined {
   if (!cursor) return undefined;
   try {
     const mark: unknown = JSON.parse(Buffer.from(cursor, 'base64url').toString('utf8'));
-    return Array.isArray(mark) && mark.length === 5 ? (mark as Mark) : undefined;
+    if (!Array.isArray(mark) || mark.length !== 5) return undefined;
+    return mark.every((part) => part === null || ['string', 'number'].includes(typeof part)) ? (mark as Mark) : undefined;
   } catch {
     return undefined;
   }
@@ -148,24 +151,54 @@ export async function listRegister<N extends RegisterName>(
 ): Promise<RegisterPage<RegisterRows[N]>> {
   const limit = Math.min(Math.max(query.limit ?? 50, 1), 2_000);
   const column = snake(query.sort !== undefined && hasColumn(name, query.sort) ? query.sort : 'tag');
-  const descending = query.direction === 'desc';
   const counted = (await matching(db, name, query).count('* as n').first()) as { n: number } | undefined;
-  const rows = matching(db, name, query).select('*');
+  const found = await inOrder(db, name, query, column, limit + 1);
+  const page = found.slice(0, limit);
+  const last = page.at(-1);
+  return {
+    rows: await whole(db, name, query, page),
+    total: counted?.n ?? 0,
+    next: found.length > limit && last ? markOf(last, column) : null,
+  };
+}
+
+/** The keys of a page in order: narrow rows sort several times faster than whole ones. */
+async function inOrder(
+  db: Db,
+  name: RegisterName,
+  query: RegisterQuery,
+  column: string,
+  limit: number,
+): Promise<Columns[]> {
+  const descending = query.direction === 'desc';
+  const rows = matching(db, name, query).select(...new Set(['document_id', 'element_id', 'tag', column]));
   const mark = readMark(query.cursor);
   if (mark) {
     const [empty, value, ...last] = mark;
     const sql = AFTER.replace('SIGN', descending ? '<' : '>');
     void rows.whereRaw(`(${sql})`, [column, empty, column, empty, column, value, column, value, ...last] as never[]);
   }
-  void rows.orderByRaw(`?? IS NULL, ?? ${descending ? 'DESC' : 'ASC'}, tag, document_id, element_id`, [column, column]);
-  const found = (await rows.limit(limit + 1)) as Columns[];
-  const page = found.slice(0, limit);
-  const last = page.at(-1);
-  return {
-    rows: page.map((row) => shown(name, row)),
-    total: counted?.n ?? 0,
-    next: found.length > limit && last ? markOf(last, column) : null,
-  };
+  const order = `?? ${descending ? 'DESC' : 'ASC'} NULLS LAST, tag, document_id, element_id`;
+  return (await rows.orderByRaw(order, [column]).limit(limit)) as Columns[];
+}
+
+const keyOf = (row: Columns): string => `${String(row['document_id'])} ${String(row['element_id'])}`;
+
+/** Whole rows for keys, in the order of the keys. */
+async function whole<N extends RegisterName>(
+  db: Db,
+  name: N,
+  query: RegisterQuery,
+  keys: readonly Columns[],
+): Promise<Listed<RegisterRows[N]>[]> {
+  if (keys.length === 0) return [];
+  const documents = [...new Set(keys.map((key) => String(key['document_id'])))];
+  const rows = (await source(db, name, query, documents)) as Columns[];
+  const byKey = new Map(rows.map((row) => [keyOf(row), row]));
+  return keys.flatMap((key) => {
+    const row = byKey.get(keyOf(key));
+    return row ? [shown(name, row)] : [];
+  });
 }
 
 function shown<N extends RegisterName>(name: N, row: Columns): Listed<RegisterRows[N]> {

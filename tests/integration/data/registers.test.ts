@@ -1,6 +1,7 @@
 /* The registers: order, filters, pages, counts, search; what is hidden stays out of all of them; fast at 2,000 systems. */
 import { beforeAll, describe, expect, test } from 'vitest';
 import { transaction } from '@data/connection';
+import { addSighting } from '@data/field';
 import { insertMany } from '@data/mapping';
 import * as projections from '@data/projections';
 import * as registers from '@data/registers';
@@ -103,6 +104,24 @@ describe('a register', () => {
     expect(await registers.registerRowsOf(world.db, 'systems', [id], 'approved')).toEqual([]);
     expect(await tags({})).toHaveLength(4);
   });
+});
+
+test('a field condition keeps when it was last seen when its document is projected anew', async () => {
+  const world = await smallWorld();
+  const { db, siteId, unitId, people } = world;
+  const id = await addSystem(world, 'SYS-1');
+  const head = { siteId, unitId, elementId: 'fc_1', tag: 'LO-114', name: 'Locked open', systemTag: 'SYS-1' };
+  const condition = { ...head, kind: 'lock-open', requires: '', supports: ['fire'] };
+  await projections.writeProjection(db, id, 'in-force', { conditions: [condition] });
+  const at = '2026-03-16T08:00:00.000Z';
+  const sighting = { documentId: id, condition: 'fc_1', at, byId: people.operations, agrees: false };
+  await addSighting(db, sighting);
+  await projections.markConditionSeen(db, id, 'fc_1', { at, agrees: false });
+  const present = async () => (await registers.listRegister(db, 'conditions', { siteId })).rows;
+  const marked = await present();
+  expect(marked).toMatchObject([{ seenAt: at, agrees: false, supports: ['fire'] }]);
+  await projections.writeProjection(db, id, 'in-force', { conditions: [condition] });
+  expect(await present()).toEqual(marked);
 });
 
 describe('the search', () => {
