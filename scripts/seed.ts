@@ -1,29 +1,23 @@
 /* `npm run seed`: makes a new database with the invented site; `--large` makes the one of 2,000 systems for the benchmarks. */
-import { existsSync, mkdirSync, renameSync, rmSync } from 'node:fs';
+import { existsSync, mkdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { dirname, join, resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
+import { hashPassword } from '@auth/index';
 import { migrate, openDatabase } from '@data/connection';
+import { seedDemo, type SeededSite } from '../seeds';
 
 const root = dirname(dirname(fileURLToPath(import.meta.url)));
 const dataDir = resolve(process.env['SETWRIGHT_DATA_DIR'] ?? join(root, 'data'));
 const file = join(dataDir, 'setwright.db');
-const large = process.argv.includes('--large');
-const folders = large ? ['seeds', 'seeds/large'] : ['seeds'];
 
 /** A seed that breaks off must not look like a database: it is made under another name and renamed when it is whole. */
-async function makeDatabase(unfinished: string): Promise<string[]> {
+async function makeDatabase(unfinished: string): Promise<SeededSite> {
   const db = openDatabase(unfinished);
   try {
     await migrate(db);
-    const ran: string[] = [];
-    for (const directory of folders) {
-      const [names] = (await db.seed.run({ directory: join(root, directory), loadExtensions: ['.ts'] })) as [
-        string[],
-      ];
-      ran.push(...names);
-    }
+    const seeded = await seedDemo(db, { today: new Date().toISOString().slice(0, 10), hashPassword });
     await db.raw('ANALYZE');
-    return ran;
+    return seeded;
   } finally {
     await db.destroy();
   }
@@ -39,9 +33,11 @@ async function main(): Promise<number> {
   mkdirSync(dataDir, { recursive: true });
   const unfinished = `${file}.unfinished`;
   for (const end of ['', '-wal', '-shm']) rmSync(unfinished + end, { force: true });
-  const ran = await makeDatabase(unfinished);
+  const seeded = await makeDatabase(unfinished);
+  // Kept beside the database: `npm start` prints these, the tests sign in with them.
+  writeFileSync(join(dataDir, 'sign-ins.json'), `${JSON.stringify(seeded, null, 2)}\n`);
   renameSync(unfinished, file);
-  process.stdout.write(`Loaded ${ran.length} seed ${ran.length === 1 ? 'file' : 'files'} into ${file}.\n`);
+  process.stdout.write(`Loaded ${seeded.site} with ${seeded.people.length} people into ${file}.\n`);
   return 0;
 }
 

@@ -5,7 +5,6 @@ import { join, resolve } from 'node:path';
 import { buildIsCurrent, packagesAreCurrent } from './lib/fresh.mjs';
 import { ROOT, run, say, stopUnless } from './lib/run.mjs';
 
-const SIGN_INS = join(ROOT, 'seeds/sign-ins.json');
 const { env } = process;
 const demo = (env.SETWRIGHT_DEMO || 'on') === 'on';
 const dataDir = resolve(env.SETWRIGHT_DATA_DIR || join(ROOT, 'data'));
@@ -34,8 +33,9 @@ async function seed() {
 function greet({ port }) {
   const host = env.HOST || '127.0.0.1';
   say(`\nSetwright on http://${host}:${port} (data in ${dataDir}; Ctrl+C stops it)`);
-  if (!demo || !existsSync(SIGN_INS)) return;
-  const { password, people } = JSON.parse(readFileSync(SIGN_INS, 'utf8'));
+  const signIns = join(dataDir, 'sign-ins.json');
+  if (!demo || !existsSync(signIns)) return;
+  const { password, people } = JSON.parse(readFileSync(signIns, 'utf8'));
   say(`Demonstration sign-ins, all with the password ${password}:`);
   for (const { email, name, roles } of people) say(`  ${email.padEnd(34)} ${name}: ${roles.join(', ')}`);
   say('');

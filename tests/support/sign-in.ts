@@ -1,26 +1,28 @@
-/* Signs people of the invented site in, by the list that the seeds keep. */
+/* Signs people of the invented site in, by the list that the seed writes. */
 import { readFileSync } from 'node:fs';
-import { fileURLToPath } from 'node:url';
+import { dirname, join } from 'node:path';
 import { type Role } from '@domain/case';
+import { ensureTemplate } from './prepare';
 
 export type DemoPerson = { email: string; name: string; roles: Role[] };
 export type SignIns = { password: string; people: DemoPerson[] };
 
-/** The demonstration sign-ins. */
-export function demoSignIns(): SignIns {
-  const file = fileURLToPath(new URL('../../seeds/sign-ins.json', import.meta.url));
+/** The demonstration sign-ins, as the seed wrote them beside its database. */
+export async function demoSignIns(): Promise<SignIns> {
+  const file = join(dirname(await ensureTemplate('demo')), 'sign-ins.json');
   return JSON.parse(readFileSync(file, 'utf8')) as SignIns;
 }
 
 /** The first person with a role. */
-export function personWith(role: Role): DemoPerson {
-  const found = demoSignIns().people.find((person) => person.roles.includes(role));
+export async function personWith(role: Role): Promise<DemoPerson> {
+  const found = (await demoSignIns()).people.find((person) => person.roles.includes(role));
   if (!found) throw new Error(`No demonstration person is ${role}.`);
   return found;
 }
 
 /** Signs in by the interface; answers the value of the Cookie header. */
-export async function signIn(url: string, email: string, password = demoSignIns().password): Promise<string> {
+export async function signIn(url: string, email: string, given?: string): Promise<string> {
+  const password = given ?? (await demoSignIns()).password;
   const response = await fetch(`${url}/api/v1/session`, {
     method: 'POST',
     redirect: 'manual',
@@ -37,6 +39,6 @@ export async function signIn(url: string, email: string, password = demoSignIns(
 }
 
 /** Signs in the first demonstration person with a role. */
-export function signInAs(url: string, role: Role): Promise<string> {
-  return signIn(url, personWith(role).email);
+export async function signInAs(url: string, role: Role): Promise<string> {
+  return signIn(url, (await personWith(role)).email);
 }
