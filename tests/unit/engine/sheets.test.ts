@@ -235,6 +235,9 @@ describe('whatever is typed', () => {
           const worked = m.work(given);
           for (const out of Object.values(worked.outputs))
             if (typeof out === 'object') expect(out.value).toSatisfy(Number.isFinite);
+          const declared = m.outputs.map((o) => o.name.replace(/_\d+$/, ''));
+          for (const name of Object.keys(worked.outputs))
+            expect(declared).toContain(name.replace(/_\d+$/, ''));
           if (!worked.refused) expect(Object.keys(worked.outputs).length).toBeGreaterThan(0);
         }),
         { numRuns: 150 },

@@ -119,6 +119,7 @@ export const LIQUID: Method = {
     optional('Kv_formula', 'which viscosity formula', undefined, { words: [...KV_FORMULAS] }),
   ],
   outputs: [
+    output('Q', 'volume flow, when W and rho were given', 'volume-flow'),
     output('p1', 'relieving pressure, gauge', 'pressure-gauge'),
     output('A_without_viscosity', 'required area before the viscosity correction', 'area'),
     output('first_letter', 'letter for that area'),

@@ -65,6 +65,7 @@ export const LIQUID_NONCERTIFIED: Method = {
     optional('Kv', 'viscosity factor (1 when not given)', 'dimensionless', { rangeKey: 'kv' }),
   ],
   outputs: [
+    output('Q', 'volume flow, when W and rho were given', 'volume-flow'),
     output('A_required', 'required effective area', 'area'),
     output('orifice_letter', 'smallest sufficient letter'),
     output('orifice_effective_area', 'its effective area', 'area'),

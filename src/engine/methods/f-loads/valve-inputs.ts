@@ -1,7 +1,7 @@
 /* What the control-valve sheets read alike: the coefficient with its kind, the fittings, the two pressures. */
 import { type MethodInput } from '../../catalog/types';
 import { type SheetBuilder } from '../../sheet';
-import { optional } from '../common/describe';
+import { input, optional } from '../common/describe';
 import { absolutePressure, shownPressure } from '../common/pressures';
 import { type CoefficientType, type Fittings } from './control-valve';
 
@@ -16,8 +16,8 @@ export const VALVE_INPUTS: readonly MethodInput[] = [
   optional('coefficient_type', 'kind of coefficient, when its unit does not say', undefined, {
     words: [...COEFFICIENT_WORDS],
   }),
-  optional('P1', 'pressure before the valve', 'pressure-absolute'),
-  optional('P2', 'pressure after the valve', 'pressure-absolute'),
+  input('P1', 'pressure before the valve', 'pressure-absolute'),
+  input('P2', 'pressure after the valve', 'pressure-absolute'),
   optional('atmospheric_pressure', 'barometric pressure', 'pressure-absolute', { rangeKey: 'barometer' }),
   optional('d', 'valve size', 'length'),
   optional('D1', 'bore of the pipe before the valve', 'length', { rangeKey: 'bore' }),

@@ -20,6 +20,8 @@ export const LETTERS: Method = {
   outputs: [
     output('letter', 'smallest sufficient letter'),
     output('effective_area', 'its effective area in the unit of the input’s system', 'area'),
+    output('orifice_letter', 'the letter, by the name of the sizing sheets'),
+    output('orifice_effective_area', 'its area, by the name of the sizing sheets', 'area'),
     output('effective_area_SI', 'its printed effective area in mm²', 'area'),
   ],
   work(inputs, edition) {
