@@ -86,7 +86,10 @@ export function readingsOf(doc: Basis): Path[] {
     ),
     `equipment/${item.id}/levels/fire`,
   ]);
-  const points = doc.reliefPoints.map((point) => `reliefPoints/${point.id}/set`);
+  const points = doc.reliefPoints.flatMap((point) => [
+    `reliefPoints/${point.id}/set`,
+    `reliefPoints/${point.id}/cdtp`,
+  ]);
   const lines = doc.lines.map((line) => `lines/${line.id}/end/to`);
   const sources = doc.sources.flatMap((source) =>
     ['valve/coefficient', 'pump/shutoff', 'orifice/bore', 'heat/duty'].map(

@@ -21,7 +21,7 @@ const units = [...new Set(names)]
   .filter((name) => name !== '' && name !== '-')
   .sort((a, b) => b.length - a.length)
   .map(escape);
-const NUMBER = '[−-]?\\d[\\d.,\\u2009\\u202f\\u00a0]*(?:\\s?\\d{3})*(?:[eE][+−-]?\\d+)?';
+const NUMBER = '[−-]?\\d[\\d.,\\u2009\\u202f\\u00a0]*(?: \\d{3}[\\d.,]*)*(?:[eE][+−-]?\\d+)?';
 const FIGURE = new RegExp(
   `(?<![\\p{L}\\d])${NUMBER}(?:\\s*(?:–|-|to|…|and)\\s*${NUMBER})?\\s*(?:${units.join('|')})(?![\\p{L}])`,
   'gu',

@@ -63,7 +63,10 @@ export const RESULT_COLUMNS = [
 /** A register row whose result columns are null: last in every order, matched by no filter. `more` names columns of one list. */
 export function maskRow<R extends object>(row: R, more: readonly string[] = []): R {
   const columns = new RegExp(`^(${[...RESULT_COLUMNS, ...more].join('|')})($|_|[A-Z])`);
-  const kept = Object.entries(row).map(([key, value]) => [key, columns.test(key) ? null : (value as unknown)]);
+  const kept = Object.entries(row).map(([key, value]) => [
+    key,
+    columns.test(key) ? null : (value as unknown),
+  ]);
   return { ...(Object.fromEntries(kept) as R), hidden: true };
 }
 
