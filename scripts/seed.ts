@@ -1,4 +1,4 @@
-/* `npm run seed`: makes a new database with the invented site; `--large` makes the one of 2,000 systems for the benchmarks. */
+/* `npm run seed`: makes a new database with the invented site. */
 import { existsSync, mkdirSync, renameSync, rmSync, writeFileSync } from 'node:fs';
 import { dirname, join, resolve } from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -24,6 +24,10 @@ async function makeDatabase(unfinished: string): Promise<SeededSite> {
 }
 
 async function main(): Promise<number> {
+  if (process.argv.includes('--large')) {
+    process.stderr.write('The seeds offer no larger site; nothing was changed.\n');
+    return 1;
+  }
   if (existsSync(file)) {
     process.stderr.write(
       `${file} exists already; nothing was changed. Delete it, or set SETWRIGHT_DATA_DIR to another folder.\n`,
