@@ -181,8 +181,10 @@ export class SheetBuilder {
     });
   }
 
-  /** Gives a named result. */
+  /** Gives a named result; a figure that is not finite is a refusal, never a result. */
   output(name: string, value: number | string | boolean, unit = '-'): void {
+    if (typeof value === 'number' && !Number.isFinite(value))
+      this.refuse('NO_RESULT', name, `The ${name} has no finite value with these inputs; check them.`);
     this.outputs[name] = typeof value === 'number' ? { value, unit } : value;
   }
 }
