@@ -12,7 +12,6 @@ import { creditedMembers, type CredibleAnswer, type Work } from './work';
 /** Effective coefficients of API 520-1 (from memory of the standard), by topic. */
 const EFFECTIVE_KD: Record<string, number> = { a: 0.975, b: 0.975, c: 0.65, d: 0.85 };
 const NONCERTIFIED_KD = 0.62;
-const DISK_UNCERTIFIED_KC = 0.9;
 
 type Coefficient = 'gas' | 'liquid' | 'kb' | 'kw' | 'kc';
 const one = (path: Path): Found => ({ value: { value: 1, unit: '-' }, path });
@@ -40,12 +39,17 @@ function dischargeCoefficient(points: readonly ReliefPoint[], method: string): F
   return { value: { value, unit: '-' }, path: 'method default' };
 }
 
-function combination(points: readonly ReliefPoint[]): Found {
+/** Kc as entered; under an uncertified disk the site's default. */
+function combination(work: Work, points: readonly ReliefPoint[]): Found {
   const entered = lowest(points, 'kc');
   if (entered) return entered.found;
   const above = points.find((point) => point.with?.side === 'inlet');
   if (!above) return one('method default');
-  return { value: { value: DISK_UNCERTIFIED_KC, unit: '-' }, path: `reliefPoints/${above.id}/with` };
+  const site = work.rules.parameters['kcDefault'];
+  return {
+    value: { value: typeof site === 'number' ? site : 0.9, unit: '-' },
+    path: `reliefPoints/${above.id}/with`,
+  };
 }
 
 type Curve = { work: Work; ca: CredibleAnswer; back: BackPressure; name: 'Kb' | 'Kw' };
@@ -81,6 +85,6 @@ export function factorValues(work: Work, ca: CredibleAnswer, method: string, bac
     Kdr: kd,
     Kb: () => lowest(points, 'kb')?.found ?? chartFactor(points, { work, ca, back, name: 'Kb' }),
     Kw: () => lowest(points, 'kw')?.found ?? chartFactor(points, { work, ca, back, name: 'Kw' }),
-    Kc: () => combination(points),
+    Kc: () => combination(work, points),
   };
 }

@@ -5,6 +5,9 @@ import { type Resolved, type Value } from './inputs';
 import { type Made } from './sheets';
 import { type CredibleAnswer, type Work } from './work';
 
+/** Metres: the engine's own default (25 ft in US units); only a site that asks for more says so on the sheet. */
+const USUAL_FIRE_HEIGHT = 7.6;
+
 type Entry = [name: string, value: Value | undefined, field: string];
 
 /** The equipment that a load names under `vessels` or `equipment`, else the limiting item of its answer or group. */
@@ -65,6 +68,7 @@ export function fillVessels(
   const drained = vessels.length > 0 && vessels.every((equipment) => equipment.fire?.drainage === true);
   add('adequate_drainage', drained, `equipment/${vessels[0]?.id ?? ''}/fire/drainage`);
   const height = work.rules.parameters['fireHeight'];
-  if (typeof height === 'number') add('fire_height', { value: height, unit: 'm' }, 'rules/fireHeight');
+  if (typeof height === 'number' && height !== USUAL_FIRE_HEIGHT)
+    add('fire_height', { value: height, unit: 'm' }, 'rules/fireHeight');
   return filled;
 }

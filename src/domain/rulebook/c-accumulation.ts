@@ -2,7 +2,18 @@
 import { quantityOf } from '@domain/basis';
 import { type CredibleAnswer, creditedMembers, enFireLimit } from '@domain/evaluate';
 import { toSI } from '@engine/quantity';
-import { gt, inUnitOf, isFire, limitOf, onScenario, output, percent, reliefPa, setMembers } from './reading';
+import {
+  allowed,
+  gt,
+  inUnitOf,
+  isFire,
+  limitOf,
+  onScenario,
+  output,
+  percent,
+  reliefPa,
+  setMembers,
+} from './reading';
 import { type Hit, rule, type RuleContext } from './types';
 
 export const accumulationAboveLimit = rule(
@@ -115,7 +126,12 @@ export const storageLimitMisused = rule(
     }),
 );
 
-const TEST_PRESSURE_CAUSES = ['tube-rupture', 'check-valve-reverse-flow', 'inadvertent-valve-opening'];
+/** The causes that may be judged against the corrected test pressure, where the site allows it. */
+const TEST_PRESSURE_CAUSES: Readonly<Record<string, string>> = {
+  'tube-rupture': 'testPressureTubeRupture',
+  'check-valve-reverse-flow': 'testPressureReverseFlow',
+  'inadvertent-valve-opening': 'testPressureLockedValve',
+};
 
 export const testPressureLimitUsed = rule(
   {
@@ -127,7 +143,7 @@ export const testPressureLimitUsed = rule(
     severity: 'justify',
     gate: 'scenarios',
     source: 'API 521 5th 3.21, 4.3.4.2, 5.19 as quoted publicly [S]; 6th/7th [M]',
-    parameter: 'testPressureCauses',
+    parameter: 'testPressureTubeRupture',
   },
   (ctx) =>
     ctx.answers
@@ -136,7 +152,8 @@ export const testPressureLimitUsed = rule(
         const limit = limitOf(ctx, ca.answer.limiting ?? ca.group?.limiting);
         const stated =
           quantityOf(limit?.side.test) !== undefined && quantityOf(limit?.side.stressRatio) !== undefined;
-        const may = TEST_PRESSURE_CAUSES.includes(ca.scenario.key) && stated;
+        const site = TEST_PRESSURE_CAUSES[ca.scenario.key];
+        const may = stated && site !== undefined && allowed(ctx, site, false);
         return onScenario(ca.scenario, {}, may ? {} : { severity: 'stop' });
       }),
 );

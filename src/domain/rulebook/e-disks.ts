@@ -2,7 +2,7 @@
 import { quantityOf, type ReliefPoint } from '@domain/basis';
 import { dimensionOf, type Q, toSI } from '@engine/quantity';
 import { setLimitOf } from './d-device/back-pressure';
-import { groupsOf, gt, inUnitOf, limitOf, onPoint, percent, told } from './reading';
+import { groupsOf, gt, inUnitOf, limitOf, onPoint, param, percent, told } from './reading';
 import { type Hit, rule, type RuleContext } from './types';
 
 const RATIOS = { plain: 0.7, composite: 0.8, graphite: 0.8, scored: 0.85, reverse: 0.9 } as const;
@@ -70,7 +70,8 @@ export const diskOperatingRatio = rule(
       const us = ctx.doc.units === 'US';
       const lowest = toSI(burst) - halfRange(point, toSI(burst)) - burstTolerance(toSI(burst), us);
       const own = quantityOf(point.disk?.ratio);
-      const allowed = own ? toSI(own) : RATIOS[point.disk?.type ?? 'plain'];
+      const type = point.disk?.type ?? 'plain';
+      const allowed = own ? toSI(own) : param(ctx, `ratio.${type}`, RATIOS[type]);
       const share = toSI(operating) / lowest;
       if (lowest > 0 && !gt(share, allowed)) return [];
       return [
@@ -108,7 +109,8 @@ export const diskCombinationFactor = rule(
   (ctx) =>
     pairs(ctx).flatMap(({ valve }): Hit[] => {
       const kc = quantityOf(valve.k?.kc);
-      if (!kc || !gt(toSI(kc), 0.9) || valve.with?.certifiedPair !== undefined) return [];
+      if (!kc || !gt(toSI(kc), param(ctx, 'kcDefault', 0.9)) || valve.with?.certifiedPair !== undefined)
+        return [];
       return [onPoint(valve, { kc }, { worse: toSI(kc), field: `reliefPoints/${valve.id}/k/kc` })];
     }),
 );
@@ -173,7 +175,8 @@ export const diskValvePressureGap = rule(
       const [pb, ps]: (Q | undefined)[] = [quantityOf(disk.disk?.burst), quantityOf(valve.set)];
       if (!pb || !ps) return [];
       const ratio = toSI(pb) / toSI(ps);
-      if (!gt(0.9, ratio) && !gt(ratio, 1.1)) return [];
+      const gap = param(ctx, 'gap', 0.1);
+      if (!gt(1 - gap, ratio) && !gt(ratio, 1 + gap)) return [];
       return [onPoint(valve, { pb, ps, ratio: told(ratio, '-') }, { worse: Math.abs(ratio - 1) })];
     }),
 );

@@ -203,7 +203,7 @@ export const cdtpMissing = rule(
       const hot = T !== undefined && toSI(T) > threshold;
       const pressed = isConventional(point) && back !== undefined && toSI(back) > 0;
       if (!hot && !pressed) return [];
-      const reason = hot ? 'it relieves hot' : 'a constant back pressure stands on it';
+      const reason = hot ? 'its relieving temperature' : 'the constant back pressure on it';
       return [
         onPoint(
           point,

@@ -99,7 +99,6 @@ export const fireZoneMissing = rule(
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 521 zone 230–460 m² quoted [S]',
-    parameter: 'fireZoneArea',
   },
   (ctx) =>
     fires(ctx).flatMap(({ ca, equipment }): Hit[] =>

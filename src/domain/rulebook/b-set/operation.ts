@@ -44,7 +44,10 @@ function operated(ctx: RuleContext): Operated[] {
 function marginShare(ctx: RuleContext, point: ReliefPoint): { share: number; floored: boolean } {
   if (point.axes.holds === 'supplementary') return { share: 0.03, floored: false };
   if (point.axes.actuation.includes('pilot'))
-    return { share: point.axes.action === 'modulating' ? 0.02 : 0.05, floored: false };
+    return {
+      share: point.axes.action === 'modulating' ? 0.02 : param(ctx, 'marginPilot', 0.05),
+      floored: false,
+    };
   if (point.seat === 'soft') return { share: 0.07, floored: false };
   return { share: param(ctx, 'marginSpring', 0.1), floored: true };
 }
@@ -113,7 +116,10 @@ export const reseatBelowOperating = rule(
     operated(ctx).flatMap((item): Hit[] => {
       if (!item.normal || item.point.axes.recloses !== 'yes') return [];
       const known = blowdownShare(item.point);
-      const assumed = item.point.duty === 'liquid' ? 0.2 : param(ctx, 'assumedBlowdownGas', 0.07);
+      const assumed =
+        item.point.duty === 'liquid'
+          ? param(ctx, 'assumedBlowdownLiquid', 0.2)
+          : param(ctx, 'assumedBlowdownGas', 0.07);
       const reseat = item.setPa * (1 - (known ?? assumed));
       if (!gt(toSI(item.normal), reseat)) return [];
       const values = { reseat: inUnitOf(reseat, item.set), pop: item.normal, set: item.set };

@@ -48,7 +48,6 @@ export const scenarioStatusMissing = rule(
     severity: 'stop',
     gate: 'scenarios',
     source: 'CSB Williams Geismar recommendation to API 521 [P]',
-    parameter: 'statuses',
   },
   (ctx) =>
     ctx.doc.scenarios
@@ -87,7 +86,7 @@ function thinness(ctx: RuleContext, scenario: Scenario, tags: readonly string[])
   const text = plainText(scenario.reason).trim();
   const least = param(ctx, 'reasonLength', 40);
   if (text.length < least) return `It has ${String(text.length)} of ${String(least)} characters.`;
-  if (/\{[^}]+\}/.test(text)) return 'A {placeholder} is not filled in.';
+  if (/\{[^}]+\}/.test(text)) return 'A placeholder is not filled in.';
   if (STANDARD.get(scenario.key)?.sentences.some((sentence) => sentence.text === text) === true)
     return 'It is the starting sentence as offered.';
   if (!namesSomething(scenario, text, tags)) return 'It names no figure, tag or reference.';

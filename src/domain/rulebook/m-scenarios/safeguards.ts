@@ -167,7 +167,7 @@ export const tubeRuptureScreen = rule(
         const high = equipment.sides.find((side) => side !== low);
         const test = quantityOf(low?.test);
         const ratio = quantityOf(low?.stressRatio);
-        const design = ctx.rules.parameters['highSideBasis'] !== 'max operating';
+        const design = ctx.rules.parameters['highSideBasis'] !== 'max-operating';
         const ph = design ? quantityOf(high?.ratings[0]?.mawp) : quantityOf(high?.operating?.max);
         if (!low || !test || !ph) return [];
         const corrected = toSI(test) * (ratio ? toSI(ratio) : 1);
