@@ -11,6 +11,8 @@ export type AnswerOptions = {
   headers?: Record<string, string>;
   /** Where a form goes on to; the form's own `_back` comes first. */
   back?: string;
+  /** The page that shows a refusal to a form, instead of `/problem`: it finds it at `locals.problem`, what was typed at `locals.sent`. */
+  page?: string;
 };
 
 /** A link of ours as it stands, anything else (another site, a script) as the start page. */
@@ -45,15 +47,21 @@ export function seeOther(path: string, headers: Record<string, string> = {}): Re
   });
 }
 
-/** A refusal: problem details for a program; for a form the page src/pages/problem.astro, which keeps what was typed in view. */
-export function refuse(context: Context, problem: Problem): Response | Promise<Response> {
-  if (context.locals.sent?.form !== true) return problemResponse(problem, context.locals.requestId);
+/** True for a form posted by src/scripts/act-form.ts, which shows a refusal itself and goes on by itself. */
+function byScript(context: Context): boolean {
+  return (context.request.headers.get('accept') ?? '').includes('application/problem+json');
+}
+
+/** A refusal: problem details for a program; for a form a page (src/pages/problem.astro) which keeps what was typed in view. */
+export function refuse(context: Context, problem: Problem, page = '/problem'): Response | Promise<Response> {
+  if (context.locals.sent?.form !== true || byScript(context))
+    return problemResponse(problem, context.locals.requestId);
   context.locals.problem = problem;
   const { accept, cookie, host } = Object.fromEntries(context.request.headers);
   const headers = Object.entries({ accept, cookie, host }).filter(
     (entry): entry is [string, string] => entry[1] !== undefined,
   );
-  return context.rewrite(new Request(new URL('/problem', context.url), { headers }));
+  return context.rewrite(new Request(new URL(page, context.url), { headers }));
 }
 
 /** Answers a result in the way that the request was made. Call it after the body was read. */
@@ -62,10 +70,13 @@ export function answer(
   result: Result<unknown>,
   options: AnswerOptions = {},
 ): Response | Promise<Response> {
-  if (!result.ok) return refuse(context, result.problem);
+  if (!result.ok) return refuse(context, result.problem, options.page);
   const sent = context.locals.sent;
-  if (sent?.form === true) return seeOther(sent.back ?? options.back ?? '/', options.headers);
-  return json(result.value, options);
+  if (sent?.form !== true) return json(result.value, options);
+  const next = localPath(sent.back ?? options.back);
+  return byScript(context)
+    ? json({ next }, { headers: options.headers ?? {} })
+    : seeOther(next, options.headers);
 }
 
 /** A POST that lets a form reach the other methods of a route by its field `_method`. */
