@@ -36,11 +36,18 @@ function write(system: DemoSystem, path: string[], value: unknown): void {
   else owner[key] = value;
 }
 
+/** A changed figure says where it comes from; one that says nothing is the case's own. */
+function withOrigin(change: DemoChange, value: unknown): unknown {
+  if (!isNode(value) || typeof value['value'] !== 'number' || 'origin' in value) return value;
+  return { ...value, origin: { kind: 'calculation', reference: `Change of the case: ${change.label}` } };
+}
+
 /** A copy of a system with the changes of a case made (`new`) or undone (`old`). */
 export function changed(system: DemoSystem, changes: DemoChange[], side: 'old' | 'new'): DemoSystem {
   const copy = structuredClone(system);
   for (const change of changes) {
-    if (change.system === system.id) write(copy, change.path, structuredClone(change[side]));
+    if (change.system === system.id)
+      write(copy, change.path, withOrigin(change, structuredClone(change[side])));
   }
   return copy;
 }

@@ -18,7 +18,12 @@ import { fireWettedInputs, vaporisationInputs, worksHere } from './methods';
 /** An answer with the external sheets that it rests on. */
 export type Answered = { answer: Answer; sheets: ExternalSheet[] };
 /** What is needed beside the answer itself: where it stands and its stored results. */
-export type AnswerContext = { system: DemoSystem; scenario: string; result: DemoAnswerResult | undefined };
+export type AnswerContext = {
+  system: DemoSystem;
+  scenario: string;
+  result: DemoAnswerResult | undefined;
+  study: string;
+};
 
 const ACCUMULATIONS: Record<string, Answer['accumulation']> = {
   single: 'single',
@@ -74,6 +79,7 @@ function loadOf(answer: DemoAnswer, context: AnswerContext): { calc: Calc; sheet
     method: theirs,
     inputs: inputsOf(answer.load, context.system),
     result: context.result,
+    study: context.study,
   });
   return { calc: { by: 'external', sheet: sheet.id }, sheet };
 }
@@ -100,6 +106,7 @@ function sizeOf(answer: DemoAnswer, context: AnswerContext): { calc: Calc; sheet
     method,
     inputs: inputsOf(answer.sizing, context.system),
     result: context.result,
+    study: context.study,
   });
   return { calc: { by: 'external', sheet: sheet.id }, sheet };
 }

@@ -3,7 +3,7 @@ import { type Basis, type ExternalSheet, type Import } from '@domain/basis';
 import { externalInputsHash } from '@domain/evaluate';
 import { type DemoAnswerResult, type DemoResults, type DemoSystem } from './demo-types';
 import { equipmentOf, placeOf } from './equipment';
-import { deviceSheets } from './external';
+import { deviceSheets, SITE_STUDY } from './external';
 import { rich } from './figures';
 import { fluidOf } from './fluids';
 import { groupOf, interlocksOf, isolationsOf } from './groups';
@@ -28,7 +28,11 @@ function backPressure(
 
 function deviceSheetsOf(system: DemoSystem, results: DemoResults): ExternalSheet[] {
   return system.devices.flatMap((device) =>
-    deviceSheets(device, results.devices[device.tag] ?? {}, backPressure(system, results, device.tag)),
+    deviceSheets(device, {
+      results: results.devices[device.tag] ?? {},
+      backPressure: backPressure(system, results, device.tag),
+      study: results.study ?? SITE_STUDY,
+    }),
   );
 }
 

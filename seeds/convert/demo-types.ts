@@ -257,7 +257,9 @@ export type DemoAnswerResult = {
   relieving_pressure: DemoQ;
   detail?: Record<string, unknown>;
 };
+/** Stored results of a system; `study` says who made the external sheets that carry them (the site's own when absent). */
 export type DemoResults = {
   causes: Record<string, DemoAnswerResult[]>;
   devices: Record<string, Record<string, unknown>>;
+  study?: string;
 };

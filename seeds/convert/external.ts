@@ -5,7 +5,8 @@ import { compact, plainQ } from './figures';
 import { idOf } from './ids';
 import { pointId } from './points';
 
-const AUTHOR = 'Relief study RS-2023, revalidated with each revision';
+/** Who made an external sheet, and in which study: the site's own, or that of a case. */
+export const SITE_STUDY = 'Relief study RS-2023';
 const TITLES: Record<string, string> = {
   load: 'Relief load',
   size: 'Required area',
@@ -23,6 +24,7 @@ export type AnswerSheet = {
   method: string;
   inputs: Record<string, Input>;
   result: DemoAnswerResult | undefined;
+  study: string;
 };
 
 /** A value of the stored results that is a quantity. */
@@ -34,6 +36,12 @@ export function isQ(value: unknown): value is DemoQ {
     'unit' in value &&
     typeof value.value === 'number'
   );
+}
+
+/** Figures of a sheet take the study as their origin. */
+function fromStudy(figures: Record<string, F>, study: string): Record<string, F> {
+  const origin = { kind: 'calculation' as const, ref: study };
+  return Object.fromEntries(Object.entries(figures).map(([name, figure]) => [name, { ...figure, origin }]));
 }
 
 function detailFigures(detail: Record<string, unknown> | undefined): Record<string, F> {
@@ -59,10 +67,10 @@ export function externalSheet(sheet: AnswerSheet): ExternalSheet {
     id: idOf('xs', sheet.about, sheet.scenario, sheet.group),
     about: sheet.about,
     title: `${TITLES[sheet.about] ?? sheet.about}, ${sheet.scenario.replaceAll('-', ' ')}, ${sheet.group}`,
-    author: AUTHOR,
+    author: sheet.study,
     method: sheet.method,
     inputs: sheet.inputs,
-    figures: figuresOf(sheet),
+    figures: fromStudy(figuresOf(sheet), sheet.study),
     words: sheet.about === 'size' ? areaKind(sheet.method) : undefined,
   });
 }
@@ -89,13 +97,9 @@ const FIGURES: Record<About, Record<string, string>> = {
   },
   inlet: {
     inlet_loss: 'inlet_loss',
-    loss_fraction_of_set: 'inlet_loss_percent_of_set',
     velocity: 'inlet_velocity_max',
   },
-  outlet: {
-    built_up_back_pressure: 'built_up_back_pressure',
-    built_up_fraction_of_set: 'built_up_percent_of_set',
-  },
+  outlet: { built_up_back_pressure: 'built_up_back_pressure' },
   force: { reaction_force: 'reaction_force', noise_at_30_m: 'noise_at_30_m' },
 };
 const METHODS: Record<About, string> = {
@@ -122,12 +126,12 @@ function inputsFor(about: About, point: string): Record<string, Input> {
   return inputs;
 }
 
+/** The stored results of a device, the back pressure that sized it, and the study they come from. */
+export type DeviceResults = { results: Results; backPressure: DemoQ | undefined; study: string };
+
 /** The external sheets about one device: rated capacity, inlet loss, back pressure used and total, force. */
-export function deviceSheets(
-  device: DemoDevice,
-  results: Results,
-  backPressure: DemoQ | undefined,
-): ExternalSheet[] {
+export function deviceSheets(device: DemoDevice, found: DeviceResults): ExternalSheet[] {
+  const { results, backPressure, study } = found;
   const point = pointId(device.tag);
   return (Object.keys(FIGURES) as About[]).flatMap((about) => {
     const picked = pick(results, FIGURES[about]);
@@ -142,10 +146,10 @@ export function deviceSheets(
         id: idOf('xs', about, device.tag),
         about,
         title: `${TITLES[about] ?? about} of ${device.tag}`,
-        author: AUTHOR,
+        author: study,
         method: fanno ? 'g.outlet-fanno' : METHODS[about],
         inputs,
-        figures,
+        figures: fromStudy(figures, study),
       },
     ];
   });

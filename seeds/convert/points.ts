@@ -148,6 +148,21 @@ function withOf(device: DemoDevice): ReliefPoint['with'] {
   });
 }
 
+type Spring = { lo: number; hi: number; unit: string; number: string };
+const SPRINGS: Record<string, Spring[] | undefined> = supplement.springs;
+
+/** The spring that holds the cold setting, where the maker's chart of springs is known. */
+function springOf(device: DemoDevice): ReliefPoint['spring'] {
+  const cold = device.nameplate.cold_differential_test_pressure?.value;
+  const spring = SPRINGS[device.tag]?.find(
+    (candidate) => cold !== undefined && cold >= candidate.lo && cold < candidate.hi,
+  );
+  if (!spring) return undefined;
+  const origin = { kind: 'maker' as const, ref: `Spring chart, spring ${spring.number}` };
+  const at = (value: number): F => ({ value, unit: spring.unit, origin });
+  return { lo: at(spring.lo), hi: at(spring.hi), number: spring.number };
+}
+
 function settings(device: DemoDevice): Partial<ReliefPoint> {
   const spec = (q: DemoQ | undefined): F | undefined => specified(q, device.tag);
   return {
@@ -159,6 +174,7 @@ function settings(device: DemoDevice): Partial<ReliefPoint> {
     fullFlowVacuum: vacuum(device.full_flow_vacuum, device.tag),
     cdtp: spec(device.nameplate.cold_differential_test_pressure),
     temperatureFactor: spec(device.temperature_multiplier),
+    spring: springOf(device),
   };
 }
 

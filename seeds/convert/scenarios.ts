@@ -6,6 +6,7 @@ import utilities from '../data/supplement/utilities.json';
 import { answerOf } from './answers';
 import { type DemoCause, type DemoResults, type DemoSystem } from './demo-types';
 import { placeOf } from './equipment';
+import { SITE_STUDY } from './external';
 import { compact, plainQ, rich } from './figures';
 import { documentId, idOf, utilityId } from './ids';
 import { ONCE_CAUSES, scenarioKey } from './keys';
@@ -120,7 +121,7 @@ type Answers = { answers: Scenario['answers']; sheets: ExternalSheet[] };
 function answersOf(cause: DemoCause, key: string, system: DemoSystem, results: DemoResults): Answers {
   const made = (cause.answers ?? []).map((answer) => {
     const result = results.causes[cause.cause]?.find((candidate) => candidate.group === answer.group);
-    return answerOf(answer, { system, scenario: key, result });
+    return answerOf(answer, { system, scenario: key, result, study: results.study ?? SITE_STUDY });
   });
   return { answers: made.map(({ answer }) => answer), sheets: made.flatMap(({ sheets }) => sheets) };
 }
