@@ -1,6 +1,7 @@
 /* Small readings that many rules share: limits and members of groups, names as the user reads them, comparison with tolerance. */
 import {
   type Equipment,
+  type Fluid,
   type Group,
   type Path,
   quantityOf,
@@ -189,4 +190,17 @@ export function onEquipment(equipment: Equipment, values: Hit['values'], extra: 
     values: { equipment: equipment.tag, ...values },
     ...extra,
   };
+}
+
+/** Answers with their fluid. */
+export function withFluid(ctx: RuleContext): { ca: CredibleAnswer; fluid: Fluid }[] {
+  return ctx.answers.flatMap((ca) => {
+    const fluid = ctx.lookup.fluids.get(ca.answer.fluid ?? '');
+    return fluid ? [{ ca, fluid }] : [];
+  });
+}
+
+/** The fluid of an answer. */
+export function fluidOf(ctx: RuleContext, ca: CredibleAnswer): Fluid | undefined {
+  return ctx.lookup.fluids.get(ca.answer.fluid ?? '');
 }

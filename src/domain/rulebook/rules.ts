@@ -6,16 +6,9 @@ import {
   mawpTemperatureExceeded,
 } from './a-equipment/mawp';
 import { boundaryValveUnregistered, equipmentUnprotected, vacuumUnprotected } from './a-equipment/protection';
-import {
-  setAboveMawp,
-  setAdditionalAbove105,
-  setFireSupplement,
-  setOutsideSpringRange,
-  setsNotStaggered,
-  tankVentSetHigh,
-  thermalReliefSetHigh,
-} from './b-set/limits';
+import { setAboveMawp, setAdditionalAbove105, setFireSupplement, setsNotStaggered } from './b-set/limits';
 import { blowdownOutsideRange, operatingMarginSmall, reseatBelowOperating } from './b-set/operation';
+import { setOutsideSpringRange, tankVentSetHigh, thermalReliefSetHigh } from './b-set/special';
 import {
   accumulationAboveLimit,
   accumulationLimitMisused,
@@ -24,13 +17,11 @@ import {
   testPressureLimitUsed,
 } from './c-accumulation';
 import { balancedTotalHigh, conventionalBuiltUpHigh, superimposedVariable } from './d-device/back-pressure';
+import { certificationMissing, pilotUnfit, reducedLiftMisused } from './d-device/build';
 import {
   actuatedDeviceAlone,
-  certificationMissing,
   nonReclosingAlone,
   openBonnetUnfit,
-  pilotUnfit,
-  reducedLiftMisused,
   trimDoesNotSuitState,
 } from './d-device/suitability';
 import {
@@ -49,26 +40,22 @@ import {
   lowLoadChatter,
   spareCredited,
 } from './f-capacity';
+import { inletLossHigh, inletLossNearBlowdown, lineLossMissing } from './g-lines';
 import {
   bonnetVentWrong,
   cdtpMismatch,
   cdtpMissing,
-  inletLossHigh,
-  inletLossNearBlowdown,
   isolationRestricts,
   isolationUnlocked,
-  lineLossMissing,
-} from './g-lines';
+} from './i-valves-and-settings';
 import {
-  correctionFactorMissing,
   densityInconsistent,
   kOutsideRange,
   latentHeatLow,
-  phaseMismatch,
-  reactionDataMissing,
   stateNotAtRelief,
   zOutsideRange,
 } from './k-fluids';
+import { correctionFactorMissing, phaseMismatch, reactionDataMissing } from './k-methods';
 import { fireDrainageUnsupported, fireInsulationCredit, fireZoneMissing } from './l-fire';
 import {
   commonCauseUnlinked,
