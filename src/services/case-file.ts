@@ -113,6 +113,14 @@ function personsIn(
   ];
 }
 
+/** Due items of the case, and the deficiencies of its systems, whichever case they came with. */
+async function dueOf(db: Db, caseId: string, documents: readonly string[]): Promise<DueRow[]> {
+  const own = await listDue(db, { caseId });
+  const others = await Promise.all(documents.map((documentId) => listDue(db, { documentId })));
+  const deficiencies = others.flat().filter((item) => item.kind === 'deficiency' && item.caseId !== caseId);
+  return [...own, ...deficiencies];
+}
+
 /** Loads a case of a site by its number; undefined when the site has no such case. */
 export async function loadCaseFile(db: Db, site: SiteRow, number: string): Promise<CaseFile | undefined> {
   const row = await findCaseByNumber(db, site.id, number);
@@ -132,7 +140,11 @@ export async function loadCaseFile(db: Db, site: SiteRow, number: string): Promi
   documents.sort((a, b) => Number(a.row.why === 'affected') - Number(b.row.why === 'affected'));
   const seats = await seatsOf(db, row.id);
   const findings = await findingsOf(db, row.id);
-  const due = await listDue(db, { caseId: row.id });
+  const due = await dueOf(
+    db,
+    row.id,
+    rows.map((one) => one.documentId),
+  );
   const people = await findPeople(db, personsIn(row, seats, findings, due));
   return {
     site,

@@ -1,7 +1,7 @@
 /* Due items that an act of the stage table makes. */
 import { addDays } from '@domain/dates';
 import { richFromText } from '@domain/text';
-import { addDue } from '@data/due';
+import { addDue, moveDue } from '@data/due';
 import { newId } from '@data/ids';
 import { type StageWrite } from './types';
 
@@ -47,9 +47,22 @@ export async function signDeficiencies(write: StageWrite): Promise<void> {
       state: 'open',
       interim: richFromText(one.interim),
       outcome: one.outcome,
+      signatureId: write.signature ?? null,
       askedBy: write.actor.person.id,
       askedAt: write.at,
     });
+  }
+  await signWaiting(write);
+}
+
+/** Deficiencies that were written down before and wait for an approver's signature are signed with the approval. */
+async function signWaiting(write: StageWrite): Promise<void> {
+  const waiting = write.file.due.filter(
+    (item) => item.kind === 'deficiency' && item.signatureId === null && item.state === 'open',
+  );
+  for (const item of waiting) {
+    const event = { at: write.at, byId: write.actor.person.id, event: 'signed', text: null };
+    await moveDue(write.trx, item.id, item.version, { signatureId: write.signature ?? null }, event);
   }
 }
 

@@ -63,8 +63,9 @@ export async function sign(write: StageWrite): Promise<void> {
     at: write.at,
     zone,
   });
+  write.signature = newId('signature');
   await addSignature(write.trx, {
-    id: newId('signature'),
+    id: write.signature,
     caseId: write.file.row.id,
     rulesId: write.file.rulesRow.id,
     documentId: document ?? null,

@@ -59,4 +59,6 @@ export type StageWrite = {
   today: string;
   /** Stage that the machine has reached with this act. */
   reached: Stage;
+  /** The signature of the act, once it is written. */
+  signature?: string;
 };

@@ -79,7 +79,7 @@ function discrepancyPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
 
 function startUpPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
   const where = placeIn(facts, 'field', of, 'start-up');
-  const items = facts.dueItems
+  return facts.dueItems
     .filter((item) => item.case === facts.case.id && item.state === 'open')
     .filter((item) => !item.document || item.document === of.document)
     .filter(
@@ -88,17 +88,6 @@ function startUpPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
     .map((item) =>
       point('start-up-action-open', `${item.text} is not done, and start-up waits for it.`, where),
     );
-  const papers = facts.case.brief.papers
-    .filter(
-      (paper) =>
-        paper.when === 'before-start-up' &&
-        paper.kind !== 'none' &&
-        !['issued', 'cancelled'].includes(paper.state),
-    )
-    .map((paper) =>
-      point('start-up-action-open', `${paper.reference} is not issued, and start-up waits for it.`, where),
-    );
-  return [...items, ...papers];
 }
 
 function aged(facts: GateFacts, of: DocumentFacts): OpenPoint[] {
