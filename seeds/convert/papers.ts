@@ -64,9 +64,9 @@ const WRITTEN: Record<string, Written[] | undefined> = scenarios.justifications;
 /** Justifications of the supplement, on scenarios. */
 function writtenFor(system: DemoSystem): Justification[] {
   return (WRITTEN[system.id] ?? []).map((own) => ({
-    id: idOf('js', own.code, own.subject),
+    id: idOf('js', own.code, own.subject.split('/')[1] ?? ''),
     code: own.code,
-    subject: `scenarios/${own.subject}`,
+    subject: own.subject,
     values: {},
     hash: hashOf('outcome', { code: own.code, subject: own.subject }),
     text: rich(own.text),

@@ -155,7 +155,7 @@ export async function writeDeficiencies(world: World, inForce: ReadonlyMap<strin
         kind: 'deficiency',
         documentId: document,
         subject: outcome.subject,
-        text: outcome.sentence,
+        text: own.text.replace('{tag}', outcome.tag),
         ownerId: personId(own.owner),
         due: world.shift.day(own.due),
         closes: own.code,
