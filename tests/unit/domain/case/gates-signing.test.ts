@@ -166,7 +166,12 @@ describe('the gate of the field', () => {
         state: 'drafted' as const,
       },
     ];
-    expect(at({ case: aCase({ brief: { ...brief, papers } }) })).toEqual(['start-up-action-open']);
+    // A paper holds start-up through its due item, which the approval makes: the brief itself is shut by then.
+    expect(at({ case: aCase({ brief: { ...brief, papers } }) })).toEqual([]);
+    const paper = { ...item, kind: 'paper' as const, bars: 'start-up' as const };
+    expect(at({ case: aCase({ brief: { ...brief, papers } }), dueItems: [paper] })).toEqual([
+      'start-up-action-open',
+    ]);
     expect(
       at({
         signatures: [signed('scenarios'), signed('check'), signed('approval', '2025-03-10T08:00:00.000Z')],
