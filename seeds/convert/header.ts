@@ -55,9 +55,23 @@ function causesOf(header: DemoHeader): Header['causes'] {
   });
 }
 
+function segmentsOf(header: DemoHeader): Header['segments'] {
+  const tip = header.segments[0]?.from;
+  return header.segments.map((segment) => ({
+    ...segmentOf(segment, idOf('sg', segment.id), segment.inside_diameter.origin?.reference ?? header.id),
+    from: segment.from === tip ? 'nd_tip' : idOf('nd', segment.from ?? 'tip'),
+    to: idOf('nd', segment.to ?? ''),
+  }));
+}
+
+function membersOf(header: DemoHeader): Header['members'] {
+  return Object.entries(header.tie_ins).flatMap(([node, systems]) =>
+    systems.map((system) => ({ id: idOf('hm', system), system: documentId(system), node: idOf('nd', node) })),
+  );
+}
+
 /** One header document. */
 export function headerOf(header: DemoHeader): Header {
-  const tip = header.segments[0]?.from;
   return {
     schema: 1,
     id: documentId(header.id),
@@ -76,18 +90,8 @@ export function headerOf(header: DemoHeader): Header {
       mach: { ...figureOf(header.limits.Mach), origin: { kind: 'judgement', ref: 'Site rule SR-7' } },
     },
     nodes: nodesOf(header),
-    segments: header.segments.map((segment) => ({
-      ...segmentOf(segment, idOf('sg', segment.id), segment.inside_diameter.origin?.reference ?? header.id),
-      from: segment.from === tip ? 'nd_tip' : idOf('nd', segment.from ?? 'tip'),
-      to: idOf('nd', segment.to ?? ''),
-    })),
-    members: Object.entries(header.tie_ins).flatMap(([node, systems]) =>
-      systems.map((system) => ({
-        id: idOf('hm', system),
-        system: documentId(system),
-        node: idOf('nd', node),
-      })),
-    ),
+    segments: segmentsOf(header),
+    members: membersOf(header),
     references: [
       { id: 'ref_1', title: `Header model of ${header.id}`, names: [header.id], kind: 'simulation' },
     ],

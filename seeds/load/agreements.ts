@@ -20,9 +20,9 @@ function given(plan: CasePlan, doc: CaseDoc, agreedAt: string): Given[] {
   const fallen = new Set(
     ticks.filter((tick) => tick.state !== 'valid').flatMap((tick) => sheetsOf(tick.sheet)),
   );
-  const ticked = new Set(ticks.flatMap((tick) => sheetsOf(tick.sheet)));
+  const alreadyAgreed = new Set(ticks.flatMap((tick) => sheetsOf(tick.sheet)));
   const sheets = doc.working.evaluation.sheets;
-  const keys = new Set([...changedSheets(factsOf(doc)).map((sheet) => sheet.key), ...ticked]);
+  const keys = new Set([...changedSheets(factsOf(doc)).map((sheet) => sheet.key), ...alreadyAgreed]);
   return [...keys].flatMap((key) => {
     const from = fallen.has(key) ? doc.base.evaluation.sheets : sheets;
     const hash = from[key]?.hash;

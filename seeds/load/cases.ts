@@ -65,6 +65,14 @@ function authorisedOf(plan: CasePlan): CaseRow['authorised'] {
   };
 }
 
+async function writeSeats({ demo, id, world }: CasePlan, fromAt: string): Promise<void> {
+  for (const { role, person } of seatsOf(demo)) {
+    await takeSeat(world.trx, { caseId: id, role, personId: personId(person), fromAt });
+  }
+  const [, year = '', number = ''] = demo.id.split('-');
+  await raiseCaseCounter(world.trx, SITE_ID, Number(year), Number(number));
+}
+
 /** Writes the row of a case and its seats. */
 export async function writeCaseRow(plan: CasePlan): Promise<void> {
   const { demo, world, brief } = plan;
@@ -101,16 +109,7 @@ export async function writeCaseRow(plan: CasePlan): Promise<void> {
     rulesId: RULES_ID,
     authorised: authorisedOf(plan),
   });
-  for (const seat of seatsOf(demo)) {
-    await takeSeat(world.trx, {
-      caseId: plan.id,
-      role: seat.role,
-      personId: personId(seat.person),
-      fromAt: raisedAt,
-    });
-  }
-  const [, year = '', number = ''] = demo.id.split('-');
-  await raiseCaseCounter(world.trx, SITE_ID, Number(year), Number(number));
+  await writeSeats(plan, raisedAt);
 }
 
 async function writeWorking(plan: CasePlan, doc: CaseDoc): Promise<void> {

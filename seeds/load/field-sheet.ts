@@ -171,6 +171,12 @@ function documentOf(facts: FieldFacts, key: string): string {
   return facts.lines.find((line) => line.key === key)?.document ?? '';
 }
 
+async function writePhotos(plan: CasePlan, facts: FieldFacts): Promise<void> {
+  for (const entry of facts.entries) {
+    for (const file of entry.files) await writePhoto(plan.world, file, entry.by, entry.got);
+  }
+}
+
 /** Writes lines, entries and discrepancies. */
 export async function writeField(plan: CasePlan, facts: FieldFacts): Promise<void> {
   const { trx } = plan.world;
@@ -188,9 +194,7 @@ export async function writeField(plan: CasePlan, facts: FieldFacts): Promise<voi
     facts: {},
   }));
   if (signed || facts.entries.length > 0) await insertMany(trx, FIELD_LINES, lines);
-  for (const entry of facts.entries) {
-    for (const file of entry.files) await writePhoto(plan.world, file, entry.by, entry.got);
-  }
+  await writePhotos(plan, facts);
   const wrong = new Set(facts.discrepancies.map((one) => one.entry));
   const entries = facts.entries.map(({ case: caseId, as, by, cannot: _cannot, ...entry }) => ({
     ...entry,

@@ -81,47 +81,35 @@ function renamed(body: Basis, n: number): Basis {
 
 type Made = { body: Basis; template: Template; hash: string };
 
-function rowsOf(
-  made: readonly Made[],
-  at: string,
-): { documents: object[]; revisions: object[]; pages: object[] } {
+function documentRow({ body }: Made): object {
+  const { id, tag, name, unit, grade } = body;
+  return { id, siteId: SITE_ID, kind: 'system', tag, name, unitId: unit, ownerId: null, grade };
+}
+
+function revisionRow({ body, template, hash }: Made, at: string): object {
   return {
-    documents: made.map(({ body }) => ({
-      id: body.id,
-      siteId: SITE_ID,
-      kind: 'system',
-      tag: body.tag,
-      name: body.name,
-      unitId: body.unit,
-      ownerId: null,
-      grade: body.grade,
-    })),
-    revisions: made.map(({ body, template, hash }) => ({
-      id: `rev_${body.id}`,
-      documentId: body.id,
-      number: 1,
-      state: 'in-force',
-      documentHash: hash,
-      importsHash: template.bound.importsHash,
-      rulesId: RULES_ID,
-      evaluationKey: null,
-      approvedAt: at,
-      inPlantFrom: at,
-      knownFrom: at,
-      held: true,
-      note: NOTE,
-      body: pack(body),
-    })),
-    pages: made.map(({ body }) => ({
-      kind: 'system',
-      siteId: SITE_ID,
-      ofId: body.id,
-      place: `systems/${body.tag}`,
-      hides: false,
-      title: `${body.tag} ${body.name}`,
-      body: `${body.service}\n${tagsOf(body).join(' ')}`,
-    })),
+    id: `rev_${body.id}`,
+    documentId: body.id,
+    number: 1,
+    state: 'in-force',
+    documentHash: hash,
+    importsHash: template.bound.importsHash,
+    rulesId: RULES_ID,
+    evaluationKey: null,
+    approvedAt: at,
+    inPlantFrom: at,
+    knownFrom: at,
+    held: true,
+    note: NOTE,
+    body: pack(body),
   };
+}
+
+function searchPage({ body }: Made): object {
+  const title = `${body.tag} ${body.name}`;
+  const text = `${body.service}\n${tagsOf(body).join(' ')}`;
+  const place = `systems/${body.tag}`;
+  return { kind: 'system', siteId: SITE_ID, ofId: body.id, place, hides: false, title, body: text };
 }
 
 /** Register rows of one system; its figures are those of its template, whose numbers are the same. */
@@ -165,16 +153,15 @@ async function project(world: World, made: readonly Made[], at: string): Promise
 }
 
 async function writeChunk(world: World, made: readonly Made[], at: string): Promise<void> {
-  const { documents, revisions, pages } = rowsOf(made, at);
-  await insertMany(world.trx, DOCUMENTS, documents as never);
+  await insertMany(world.trx, DOCUMENTS, made.map(documentRow) as never);
   for (const { body, template, hash } of made) {
     await signGrade(world, body.id, at, { documentHash: hash, importsHash: template.bound.importsHash });
   }
-  await insertMany(world.trx, REVISIONS, revisions as never);
+  await insertMany(world.trx, REVISIONS, made.map((one) => revisionRow(one, at)) as never);
   await world.trx.raw(
     `UPDATE documents SET in_force_id = 'rev_' || id WHERE in_force_id IS NULL AND kind = 'system'`,
   );
-  await insertMany(world.trx, SEARCH_PAGES, pages as never);
+  await insertMany(world.trx, SEARCH_PAGES, made.map(searchPage) as never);
   await project(world, made, at);
 }
 

@@ -1,7 +1,10 @@
 /* Fills the registers and the search: systems through the one function that projects them, headers and cases beside. */
 import { type FieldCondition } from '@domain/basis';
+import { type Header } from '@domain/header';
 import { plainText } from '@domain/text';
 import { addSighting } from '@data/field';
+import { type New } from '@data/mapping';
+import { type HeaderRow } from '@data/tables/registers';
 import { markConditionSeen, writeProjection } from '@data/projections';
 import { writeSearch } from '@data/search';
 import { projectDocument } from '@services/projections';
@@ -22,45 +25,38 @@ function worstNode(tag: string): { cause: string; si: number; unit: string } | u
   return causes.toSorted((a, b) => b.si - a.si)[0];
 }
 
+type DemoHeaderFile = (typeof SITE.headers)[number];
+
+function headerRow(demo: DemoHeaderFile, header: Header): Omit<New<HeaderRow>, 'documentId' | 'truth'> {
+  const worst = worstNode(demo.id);
+  const name = demo.scenarios.find((one) => one.id === worst?.cause)?.name;
+  const cause = header.causes.find((candidate) => candidate.name === name);
+  return {
+    elementId: '',
+    siteId: SITE_ID,
+    unitId: unitId(demo.unit),
+    tag: demo.id,
+    name: demo.name,
+    revision: 1,
+    service: demo.service,
+    disposesTo: demo.disposes_to,
+    members: header.members.length,
+    causes: header.causes.length,
+    governing: cause?.id ?? null,
+    governingName: cause?.name ?? null,
+    backSi: worst?.si ?? null,
+    backUnit: worst?.unit ?? null,
+    verdict: 'not-sized',
+  };
+}
+
 async function writeHeaderRows(world: World): Promise<void> {
   for (const demo of SITE.headers) {
     const header = headerOf(demo);
-    const worst = worstNode(demo.id);
-    const cause = header.causes.find(
-      (candidate) => candidate.name === demo.scenarios.find((one) => one.id === worst?.cause)?.name,
-    );
-    await writeProjection(world.trx, header.id, 'in-force', {
-      headers: [
-        {
-          elementId: '',
-          siteId: SITE_ID,
-          unitId: unitId(demo.unit),
-          tag: demo.id,
-          name: demo.name,
-          revision: 1,
-          service: demo.service,
-          disposesTo: demo.disposes_to,
-          members: header.members.length,
-          causes: header.causes.length,
-          governing: cause?.id ?? null,
-          governingName: cause?.name ?? null,
-          backSi: worst?.si ?? null,
-          backUnit: worst?.unit ?? null,
-          verdict: 'not-sized',
-        },
-      ],
-    });
+    await writeProjection(world.trx, header.id, 'in-force', { headers: [headerRow(demo, header)] });
     const body = `${demo.service}\n${demo.disposes_to}\n${header.causes.map((one) => one.name).join('\n')}`;
-    await writeSearch(world.trx, header.id, [
-      {
-        kind: 'header',
-        siteId: SITE_ID,
-        place: `headers/${demo.id}`,
-        hides: false,
-        title: `${demo.id} ${demo.name}`,
-        body,
-      },
-    ]);
+    const page = { kind: 'header', siteId: SITE_ID, place: `headers/${demo.id}`, hides: false };
+    await writeSearch(world.trx, header.id, [{ ...page, title: `${demo.id} ${demo.name}`, body }]);
   }
 }
 
