@@ -13,16 +13,10 @@ function asOne(code) {
   return { passed: code === 0 ? 1 : 0, failed: code === 0 ? 0 : 1 };
 }
 
+/** Astro's check reads every .astro and .ts file of the project; the bare compiler cannot read .astro imports. */
 async function types() {
-  const astro = await runBin('astro/astro.js', [
-    'check',
-    '--minimumFailingSeverity',
-    'error',
-    '--minimumSeverity',
-    'error',
-  ]);
-  const tsc = await runBin('typescript/bin/tsc', ['--noEmit', '-p', '.']);
-  return asOne(astro || tsc);
+  const severity = ['--minimumFailingSeverity', 'error', '--minimumSeverity', 'error'];
+  return asOne(await runBin('astro/astro.js', ['check', ...severity]));
 }
 
 async function vitest(part) {

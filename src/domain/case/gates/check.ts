@@ -5,27 +5,19 @@ import { type DocumentFacts, type GateFacts, nameOf, placeIn, point } from '../g
 import { unseenPoints } from '../unseen-points';
 import { outcomePoints } from './outcomes';
 
-/** A system whose base is no longer what stands: another revision was issued or waits to be installed. */
+/**
+ * A system whose base is no longer what is in force: another revision was issued meanwhile. A revision that is signed and
+ * waits to be installed is shown, not asked about here: two cases may be approved in one order and installed in the other.
+ */
 export function movedBasis(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
-  const where = placeIn(facts, 'differences', of);
-  const points: OpenPoint[] = [];
-  if (of.inForce !== undefined && of.inForce !== of.base && of.state !== 'issued')
-    points.push(
-      point(
-        'basis-moved',
-        `${of.tag} was issued in another revision after this case began: carry the case over, then check again what it touches.`,
-        where,
-      ),
-    );
-  if (of.pendingCase !== undefined && of.state !== 'issued')
-    points.push(
-      point(
-        'basis-moved',
-        `${of.tag} has a signed revision of ${of.pendingCase} that waits to be installed: compare with it first.`,
-        where,
-      ),
-    );
-  return points;
+  if (of.inForce === undefined || of.inForce === of.base || of.state === 'issued') return [];
+  return [
+    point(
+      'basis-moved',
+      `${of.tag} was issued in another revision after this case began: carry the case over, then check again what it touches.`,
+      placeIn(facts, 'differences', of),
+    ),
+  ];
 }
 
 /** Findings that must be settled first. */
