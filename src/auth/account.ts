@@ -86,6 +86,8 @@ export type FirstCoordinator = {
   name: string;
   password: string;
   site: Pick<SiteRow, 'slug' | 'name' | 'timeZone' | 'barometer' | 'facts'>;
+  /** What else begins with the site, in the same transaction: its rules. */
+  begin?: (trx: Db, made: { siteId: Id; personId: Id; at: Instant }) => Promise<void>;
 };
 
 /** Creates site and first site coordinator of an empty installation; refused as soon as anyone exists. */
@@ -116,6 +118,7 @@ export async function createFirstCoordinator(
     const body = { changes: [], why: 'The first site coordinator of an empty installation.' };
     const entry = { siteId, at, act: 'person.first-coordinator', byId: personId, subject: personId, body };
     await appendTrail(trx, { ...entry, hides: false });
+    await asked.begin?.(trx, { siteId, personId, at });
     const person = await people.findPerson(trx, personId);
     return person ? ok({ person, siteId }) : fail('INTERNAL', 'The person was not written.');
   });

@@ -3,6 +3,7 @@
 const PUBLIC = new Set([
   '/sign-in',
   '/first-coordinator',
+  '/invite/[token]',
   '/health',
   '/403',
   '/404',
@@ -10,7 +11,7 @@ const PUBLIC = new Set([
   '/problem',
   '/favicon.ico',
 ]);
-const PUBLIC_POSTS = new Set(['/api/v1/session', '/api/v1/first-coordinator']);
+const PUBLIC_POSTS = new Set(['/api/v1/session', '/api/v1/first-coordinator', '/api/v1/invite']);
 const CATCHER = new Set(['/mail', '/mail/message', '/mail/messages.json']);
 
 /** A route as Astro matched it (`/s/[site]/cases/[number]`): never the text of the address, which can be written in many ways. */

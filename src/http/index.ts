@@ -8,3 +8,4 @@ export { shownFields, textWithLinks } from './typed';
 export { ctxOf, siteActor, writeOf } from './site';
 export { nested } from './nest';
 export { problemDetails, problemResponse, type ProblemDetails } from './problem';
+export { refusedForm, type Refused } from './refused';
