@@ -32,6 +32,7 @@ export const raiseSchema = z.strictObject({
   class: z.enum(CASE_CLASSES, { error: `The class is one of ${CASE_CLASSES.join(', ')}.` }),
   title: line('The title', 3),
   systems: ids('The system').min(1, 'Name at least one system that changes.'),
+  whatChanges: rich('What changes').optional(),
   ends: day('The end').optional(),
   fromQuestion: id('The relief question').optional(),
 });

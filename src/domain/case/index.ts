@@ -25,3 +25,4 @@ export { toleranceOf, TOLERANCES, type Tolerance, type UnseenQuantity } from './
 export { lengthOf } from './rich-text';
 export * from './signature';
 export * from './acts';
+export { richOfField } from './text-fields';

@@ -1,5 +1,7 @@
 /* Text that people type into the acts of a case: trimmed, capped, refused with a sentence. */
 import { z } from 'zod';
+import { cleanRich } from '@domain/text/clean';
+import { richFromText } from '@domain/text/read';
 import { type Rich } from './scalars';
 
 /** Longest texts taken, in characters; a rich text is measured by its JSON. */
@@ -23,9 +25,20 @@ export function reason(what: string, min = 1) {
     .max(CAPS.reason, `${what} is longer than ${CAPS.reason} characters: shorten it or attach a file.`);
 }
 
-/** Rich text as the editor sends it; its nodes are cleaned by the text module before storing. */
+/** What a form sends for a rich text: the editor's JSON as a string, or the plain text of a bare text area. */
+export function richOfField(value: unknown): unknown {
+  if (typeof value !== 'string') return value;
+  if (!value.startsWith('{"type":"doc"')) return richFromText(value);
+  try {
+    return cleanRich(JSON.parse(value));
+  } catch {
+    return richFromText(value);
+  }
+}
+
+/** Rich text as the editor sends it, or plain text of a form; its nodes are cleaned by the text module before storing. */
 export function rich(what: string) {
-  return z
+  const doc = z
     .object(
       {
         type: z.literal('doc', { error: `${what} is not a text of the editor.` }),
@@ -37,7 +50,8 @@ export function rich(what: string) {
     )
     .refine((value) => JSON.stringify(value).length <= CAPS.rich, {
       error: `${what} is longer than ${CAPS.rich} characters: shorten it or attach a file.`,
-    }) satisfies z.ZodType<Rich>;
+    });
+  return z.preprocess(richOfField, doc) satisfies z.ZodType<Rich>;
 }
 
 /** A day of the calendar, `2026-03-17`. */

@@ -3,7 +3,10 @@ import { type OpenPoint } from '@domain/result';
 import { type GateFacts, placeIn, point } from '../gate-facts';
 import { deficiencyPoints, outcomePoints } from './outcomes';
 
-/** Signatures of earlier gates that no longer bind what stands now. */
+/**
+ * Signatures of earlier gates that no longer bind what stands now. The check's is asked for, not the scenario analysis's: a
+ * clean carry-over goes back to the check alone, whose signature binds everything that the earlier one did.
+ */
 export function voidedPoints(facts: GateFacts, gates: readonly string[]): OpenPoint[] {
   return gates
     .filter((gate) => !facts.signatures.some((signature) => signature.gate === gate && signature.valid))
@@ -53,7 +56,7 @@ function emergency(facts: GateFacts): OpenPoint[] {
 export function approvalPoints(facts: GateFacts): OpenPoint[] {
   const open = facts.documents.filter((of) => of.state !== 'dropped');
   return [
-    ...voidedPoints(facts, ['scenarios', 'check']),
+    ...voidedPoints(facts, ['check']),
     ...approvers(facts),
     ...emergency(facts),
     ...open.flatMap((of) => [...deficiencyPoints(of, facts, false), ...outcomePoints('approval', of, facts)]),

@@ -115,7 +115,7 @@ export function fieldPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
         ]
       : [];
   return [
-    ...voidedPoints(facts, ['scenarios', 'check', 'approval']),
+    ...voidedPoints(facts, ['check', 'approval']),
     ...grade,
     ...movedBasis(of, facts),
     ...lines.flatMap((line) => linePoints(line, of, facts)),
