@@ -34,9 +34,9 @@ function make<K extends keyof HTMLElementTagNameMap>(
 /** The control that a field path means, also within lists: `roles/0` is in `roles[]`. */
 function controlOf(form: HTMLFormElement, path: string): HTMLElement | undefined {
   const name = path.replaceAll('/', '.');
-  const names = [name, `${name}[]`, `${name}.value`, name.replace(/\.\d+$/, '[]')];
+  const names = [name, `${name}[]`, `${name}.value`, `set.${name}`, name.replace(/\.\d+$/, '[]')];
   const controls = [...form.querySelectorAll<HTMLElement>('[name]:not([type=hidden])')];
-  return controls.find((control) => names.includes(control.getAttribute('name') ?? ''));
+  return controls.find((control) => names.includes((control.getAttribute('name') ?? '').replaceAll('/', '.')));
 }
 
 function labelOf(control: HTMLElement): string {

@@ -1,7 +1,7 @@
 /* Changes the brief of a case: what changes and why, effect, time, papers. */
 import { briefHash, briefSchema, can, type Brief } from '@domain/case';
 import { fail, fieldErrors, ok, type Result } from '@domain/result';
-import { cleanRich } from '@domain/text';
+import { cleanRich, everyNode, nodesOf, plainText, type Rich } from '@domain/text';
 import { updateCase } from '@data/cases';
 import { appendTrail } from '@data/trail';
 import { type CaseFile, loadCaseFile, onFile } from '../case-file';
@@ -12,9 +12,22 @@ export type BriefSaved = { number: string; version: number; brief: Brief };
 
 const RICH = ['whatChanges', 'technicalBasis', 'effect', 'removal', 'safeguards', 'substitute'] as const;
 
+/** A live node (figure, place, person) says more than its words. */
+function holdsLive(text: Rich): boolean {
+  return [...everyNode(nodesOf(text))].some((node) => ['figure', 'place', 'person'].includes(node.type));
+}
+
+/** A bare text area shows live figures as words: sent back unchanged, they stay live. */
+function keptLive(stored: Rich | undefined, sent: Rich): Rich {
+  const same = stored !== undefined && plainText(stored) === plainText(sent);
+  return same && holdsLive(stored) && !holdsLive(sent) ? stored : sent;
+}
+
 function merged(file: CaseFile, patch: Partial<Brief>): Result<Brief> {
   const next: Record<string, unknown> = { ...file.row.brief, ...patch };
-  for (const name of RICH) if (next[name] !== undefined) next[name] = cleanRich(next[name]);
+  for (const name of RICH)
+    if (next[name] !== undefined)
+      next[name] = keptLive(file.row.brief[name] as Rich | undefined, cleanRich(next[name]));
   const parsed = briefSchema.safeParse(next);
   if (parsed.success) return ok(parsed.data);
   const errors = fieldErrors(parsed.error.issues);

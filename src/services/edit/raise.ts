@@ -1,6 +1,7 @@
 /* Raises a case on one or more systems, or copies a refused or withdrawn one to a new draft. */
 import { type ActBody, can, emptyBrief, briefHash, type Brief } from '@domain/case';
 import { fail, ok, type Result } from '@domain/result';
+import { cleanRich } from '@domain/text';
 import { caseSnapshot } from '@workflows/case';
 import { createCase, nextCaseNumber, putCaseDocument, takeSeat } from '@data/cases';
 import { type Db } from '@data/connection';
@@ -12,6 +13,7 @@ import { loadCaseFile, onFile, rulesOf } from '../case-file';
 import { type Actor, type Ctx, instant, today, whoOf } from '../context';
 import { answeredBefore, inOneAct, type Write } from '../one-act';
 import { noteAffected } from './affected';
+import { isRaisable, RAISABLE_SENTENCE } from './classes';
 
 export type Raised = { number: string; version: number };
 
@@ -122,6 +124,11 @@ async function write(trx: Db, ctx: Ctx, actor: Actor, made: New): Promise<Result
   return ok({ number, version: 1 });
 }
 
+function notRaisable(): Result<never> {
+  const errors = [{ path: 'class', code: 'class', sentence: RAISABLE_SENTENCE }];
+  return fail('SCHEMA', RAISABLE_SENTENCE, { errors });
+}
+
 /** Raises a case. SCHEMA when a system is unknown; the first answer again when the key was sent before. */
 export async function raiseCase(
   ctx: Ctx,
@@ -132,10 +139,15 @@ export async function raiseCase(
   if (!may.ok) return fail(may.code, may.sentence);
   if (!sent.body.ok) return sent.body;
   if (!sent.once.ok) return sent.once;
+  if (!isRaisable(sent.body.value.class)) return notRaisable();
   const systems = await systemsNamed(ctx.db, actor.site.id, sent.body.value.systems);
   if (!systems.ok) return systems;
-  const { class: kind, title, ends } = sent.body.value;
-  const brief = { ...emptyBrief(title), ...(ends !== undefined ? { ends } : {}) };
+  const { class: kind, title, ends, whatChanges } = sent.body.value;
+  const brief = {
+    ...emptyBrief(title),
+    ...(ends !== undefined ? { ends } : {}),
+    ...(whatChanges ? { whatChanges: cleanRich(whatChanges) } : {}),
+  };
   return inOneAct(ctx, actor, sent.once.value, (trx) =>
     write(trx, ctx, actor, { class: kind, brief, systems: systems.value }),
   );
@@ -146,7 +158,7 @@ export async function copyCase(
   ctx: Ctx,
   actor: Actor,
   number: string,
-  sent: Pick<Write<unknown>, 'once'>,
+  sent: Pick<Write<unknown>, 'once' | 'body'>,
 ): Promise<Result<Raised>> {
   const before = sent.once.ok ? await answeredBefore<Raised>(ctx, actor, sent.once.value) : undefined;
   if (before) return before;
@@ -154,6 +166,7 @@ export async function copyCase(
   if (!file) return fail('UNKNOWN', `This site has no case ${number}.`);
   const may = can(whoOf(actor), 'copy', onFile(file));
   if (!may.ok) return fail(may.code, may.sentence);
+  if (!sent.body.ok) return sent.body;
   if (!sent.once.ok) return sent.once;
   const made = {
     class: file.row.class,

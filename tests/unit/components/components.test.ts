@@ -19,7 +19,7 @@ describe('forms', () => {
       title: 'Sign',
       meaning: 'I accept.',
       signs: 'KW-1',
-      page: 'h1',
+      pageHash: 'h1',
       label: 'Sign and pass',
       version: 4,
       key: 'k9',
@@ -29,7 +29,7 @@ describe('forms', () => {
       ['_version', '4'],
       ['_key', 'k9'],
       ['_back', '/s/x'],
-      ['page', 'h1'],
+      ['pageHash', 'h1'],
     ]) {
       expect(html).toContain(`name="${name}" value="${value}"`);
     }
