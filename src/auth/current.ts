@@ -1,6 +1,7 @@
 /* Who asks: the person behind a cookie, with their sites, roles there, and for whom they stand in. */
 import { type Role } from '@domain/case';
 import { nowInstant } from '@data/ids';
+import { untilNextWrite } from '@data/memo';
 import { type DelegationRow, findPerson, type Person, rolesOf, standsInFor } from '@data/people';
 import { findSites, type SiteRow } from '@data/site';
 import { type Auth } from './auth';
@@ -29,10 +30,10 @@ async function sitesOf(auth: Auth, personId: string): Promise<SiteRoles[]> {
   }));
 }
 
-/** The person who asks, from the Cookie header; null when no session stands behind it. */
-export async function whoAsks(auth: Auth, cookieHeader: string | null | undefined): Promise<Current | null> {
-  const token = auth.lucia.readSessionCookie(cookieHeader ?? '');
-  if (!token) return null;
+/** How long a session is trusted without a look at its row, seconds: ending one is a write, which is seen at once. */
+const TRUSTED_FOR = 20;
+
+async function readPerson(auth: Auth, token: string): Promise<Current | null> {
   const { session } = await auth.lucia.validateSession(hashToken(token));
   const person = session && (await findPerson(auth.db, session.userId));
   if (!person) return null;
@@ -52,6 +53,17 @@ export async function whoAsks(auth: Auth, cookieHeader: string | null | undefine
     standsInFor: await standsInFor(auth.db, person.id, now.slice(0, 10)),
     renewed: session.fresh ? auth.lucia.createSessionCookie(token).serialize() : null,
   };
+}
+
+/** The person who asks, from the Cookie header; null when no session stands behind it. */
+export async function whoAsks(auth: Auth, cookieHeader: string | null | undefined): Promise<Current | null> {
+  const token = auth.lucia.readSessionCookie(cookieHeader ?? '');
+  if (!token) return null;
+  const key = ['who', hashToken(token)];
+  const current = await untilNextWrite(auth.db, key, () => readPerson(auth, token), TRUSTED_FOR);
+  // What was kept may have run out since, and a renewed cookie is sent once only.
+  if (current && Date.parse(current.session.expiresAt) <= Date.now()) return readPerson(auth, token);
+  return current;
 }
 
 /** The person's roles at a site; empty when they have none there (the page then does not exist for them). */

@@ -1,6 +1,7 @@
 /* Whose results are hidden from a person: every case that they check and have not finished working unseen. */
 import { type GateFacts, unseenLeft } from '@domain/case';
 import { casesOfPerson, type CaseRow } from '@data/cases';
+import { untilNextWrite } from '@data/memo';
 import { type CaseFile, loadCaseFile } from './case-file';
 import { type Actor, type Ctx, today } from './context';
 import { gateFacts } from './gate-facts';
@@ -29,8 +30,13 @@ function documentsOf(file: CaseFile): string[] {
   return file.documents.map((one) => one.document.id);
 }
 
-/** Everything hidden from the actor at this site, worked anew for each request: it follows the person, whatever else they are. */
-export async function hiddenOf(ctx: Ctx, actor: Actor): Promise<Hidden> {
+/** Everything hidden from the actor at this site, worked anew after each write: it follows the person, whatever else they are. */
+export function hiddenOf(ctx: Ctx, actor: Actor): Promise<Hidden> {
+  const key = ['hidden', actor.site.id, actor.person.id, ...actor.standsFor, today(ctx, actor.site)];
+  return untilNextWrite(ctx.db, key, () => workHidden(ctx, actor));
+}
+
+async function workHidden(ctx: Ctx, actor: Actor): Promise<Hidden> {
   const persons = [actor.person.id, ...actor.standsFor];
   const seated = await Promise.all(persons.map((id) => casesOfPerson(ctx.db, actor.site.id, id, 'checker')));
   const rows = new Map(

@@ -4,6 +4,7 @@ import { dirname } from 'node:path';
 import { type Database } from 'better-sqlite3';
 import knex, { type Knex } from 'knex';
 import { ImmediateClient } from './client';
+import { countWrites } from '../version';
 
 /** A connection or a transaction: every repository function takes one first. Inside a transaction, pass the transaction. */
 export type Db = Knex;
@@ -45,7 +46,9 @@ export function databaseConfig(file: string, options: OpenOptions = {}): Knex.Co
 /** Opens (and creates) the database in a file; close it with `await db.destroy()`, which folds the WAL back in. */
 export function openDatabase(file: string, options: OpenOptions = {}): Db {
   if (file !== ':memory:') mkdirSync(dirname(file), { recursive: true });
-  return knex(databaseConfig(file, options));
+  const db = knex(databaseConfig(file, options));
+  countWrites(db);
+  return db;
 }
 
 /** Runs `fn` in one write transaction: all of it is kept, or, when it throws, nothing. */

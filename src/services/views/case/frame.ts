@@ -14,8 +14,9 @@ import {
 } from '@domain/case';
 import { fail, ok, type OpenPoint, type Result } from '@domain/result';
 import { type CaseContext } from '@workflows/case';
+import { untilNextWrite } from '@data/memo';
 import { domainSeats, nameIn, onFile, type CaseFile } from '../../case-file';
-import { whoOf, type Actor, type Ctx } from '../../context';
+import { today, whoOf, type Actor, type Ctx } from '../../context';
 import { contextOf } from '../../stage/stage-act';
 import { type OpenedCase, openCase } from './open';
 
@@ -276,8 +277,7 @@ export function frameOf(of: OpenedCase): CaseFrame {
   };
 }
 
-/** Opens a case and its frame: the start of every case page. */
-export async function casePage(
+async function readPage(
   ctx: Ctx,
   actor: Actor,
   number: string,
@@ -285,4 +285,22 @@ export async function casePage(
   const opened = await openCase(ctx, actor, number);
   if (!opened.ok) return fail(opened.problem.code, opened.problem.detail);
   return ok({ of: opened.value, frame: frameOf(opened.value) });
+}
+
+/** Opens a case and its frame: the start of every case page. Read once and kept until something is written. */
+export function casePage(
+  ctx: Ctx,
+  actor: Actor,
+  number: string,
+): Promise<Result<{ of: OpenedCase; frame: CaseFrame }>> {
+  const key = [
+    'case',
+    actor.site.id,
+    actor.person.id,
+    ...actor.standsFor,
+    actor.roles.join(),
+    number,
+    today(ctx, actor.site),
+  ];
+  return untilNextWrite(ctx.db, key, () => readPage(ctx, actor, number));
 }
