@@ -48,8 +48,9 @@ async function deny(context: APIContext): Promise<Response> {
   });
 }
 
-/** Answers of Astro without a body (unknown address, method that a route does not take) become problems for programs. */
+/** Answers of Astro without a body (unknown address, method that a route does not take) become problems for programs; a page told to a form stays. */
 function toldAsProblem(context: APIContext, response: Response): Response {
+  if (context.locals.problem) return response;
   if (!isApi(context) || response.status !== 404 || response.headers.get('content-type')?.includes('json'))
     return response;
   const detail = `There is nothing here that answers ${context.request.method} ${context.url.pathname.slice(0, 200)}.`;

@@ -57,8 +57,8 @@ export function refuse(context: Context, problem: Problem, page = '/problem'): R
   if (context.locals.sent?.form !== true || byScript(context))
     return problemResponse(problem, context.locals.requestId);
   context.locals.problem = problem;
-  const { accept, cookie, host } = Object.fromEntries(context.request.headers);
-  const headers = Object.entries({ accept, cookie, host }).filter(
+  const { accept, cookie, host, referer } = Object.fromEntries(context.request.headers);
+  const headers = Object.entries({ accept, cookie, host, referer }).filter(
     (entry): entry is [string, string] => entry[1] !== undefined,
   );
   return context.rewrite(new Request(new URL(page, context.url), { headers }));

@@ -36,7 +36,9 @@ function controlOf(form: HTMLFormElement, path: string): HTMLElement | undefined
   const name = path.replaceAll('/', '.');
   const names = [name, `${name}[]`, `${name}.value`, `set.${name}`, name.replace(/\.\d+$/, '[]')];
   const controls = [...form.querySelectorAll<HTMLElement>('[name]:not([type=hidden])')];
-  return controls.find((control) => names.includes((control.getAttribute('name') ?? '').replaceAll('/', '.')));
+  return controls.find((control) =>
+    names.includes((control.getAttribute('name') ?? '').replaceAll('/', '.')),
+  );
 }
 
 function labelOf(control: HTMLElement): string {
@@ -128,7 +130,7 @@ function tell(form: HTMLFormElement, told: Told): void {
   summary.tabIndex = -1;
   summary.append(make('h2', '', told.title));
   const lines = linesOf(form, told);
-  const said = lines.length === 1 && lines[0]?.text === told.detail;
+  const said = (told.errors ?? []).some(({ sentence }) => told.detail.endsWith(sentence));
   if (!said) summary.append(make('p', '', told.detail));
   if (lines.length > 0) summary.append(listOf(lines));
   if (told.code === 'INTERNAL') summary.append(make('p', 'note', `Request ${told.id}`));

@@ -17,9 +17,10 @@ const name = asked('Give the name as it stands under a signature.');
 const job = asked('Give the job, or leave it out.').nullable();
 const phone = asked('Give the telephone number, or leave it out.', 40).nullable();
 const deputy = asked('Name a person, or leave it out.', 60).nullable();
+const ONE_ROLE = 'Give at least one role: without one a person sees nothing of the site.';
 const roles = z
   .array(z.enum(ROLES, { error: `A role is one of ${ROLES.join(', ')}.` }), {
-    error: 'Send the roles as a list.',
+    error: ({ input }) => (input === undefined ? ONE_ROLE : 'Send the roles as a list.'),
   })
   .max(ROLES.length);
 
@@ -57,7 +58,7 @@ export const addPersonSchema = z.strictObject({
   job: job.default(null),
   phone: phone.default(null),
   deputy: deputy.default(null),
-  roles: roles.min(1, 'Give at least one role: without one a person sees nothing of the site.'),
+  roles: roles.min(1, ONE_ROLE),
 });
 export type AddPerson = z.output<typeof addPersonSchema>;
 
