@@ -6,6 +6,7 @@ import {
   describePath,
   expectedAt,
   getAt,
+  isFigure,
   isKnown,
   type KnownFigure,
   type Op,
@@ -44,8 +45,8 @@ function expectsOfInput(document: Basis, path: Path): Expects | undefined {
 export function expectsAt(document: Basis, path: Path): Expects | undefined {
   const ofField = expectedAt(path, document) ?? expectsOfInput(document, path);
   if (ofField) return ofField;
-  const present = getAt(document, path) as F | undefined;
-  const unit = present && isKnown(present) ? present.unit : undefined;
+  const present = getAt(document, path);
+  const unit = isFigure(present) && isKnown(present) ? present.unit : undefined;
   const dimension = unit === undefined ? undefined : dimensionOf(unit);
   return unit !== undefined && dimension ? { dimension: [dimension], unit } : undefined;
 }
@@ -75,8 +76,9 @@ function emptied(path: Path, present: unknown): Read {
 
 /** The operation that a typed figure means; nothing when it says what stands there. */
 export function readFigure(document: Basis, path: Path, asked: Asked): Read {
-  const found = getAt(document, path) as F | undefined;
-  const present = found && isKnown(found) ? found : undefined;
+  const stored = getAt(document, path);
+  const found = stored as F | undefined;
+  const present = isFigure(stored) && isKnown(stored) ? stored : undefined;
   const text = (asked.set ?? '').trim();
   if (text === '') return found && !present ? NOTHING : emptied(path, found);
   const expects = expectsAt(document, path);
