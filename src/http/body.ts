@@ -7,19 +7,20 @@ import { nested } from './nest';
 /** The largest body that is read, in bytes. Files have a route of their own. */
 export const BODY_LIMIT = 1_000_000;
 
-const TOO_LARGE = 'The request is larger than 1 MB. Send less at once.';
+const tooLarge = (limit: number) =>
+  fail('TOO_LARGE', `The request is larger than ${String(limit / 1_000_000)} MB. Send less at once.`);
 const JSON_TYPE = /^application\/(?:[\w.+-]+\+)?json$/;
 const FORM_TYPES = ['application/x-www-form-urlencoded', 'multipart/form-data'];
 
 /** Reads the bytes, and stops at the limit whatever the length header says. */
-async function readBytes(request: Request): Promise<Result<Uint8Array>> {
-  if (Number(request.headers.get('content-length') ?? 0) > BODY_LIMIT) return fail('TOO_LARGE', TOO_LARGE);
+async function readBytes(request: Request, limit: number): Promise<Result<Uint8Array>> {
+  if (Number(request.headers.get('content-length') ?? 0) > limit) return tooLarge(limit);
   const parts: Uint8Array[] = [];
   let size = 0;
   if (request.body === null) return ok(new Uint8Array());
   for await (const part of request.body as unknown as AsyncIterable<Uint8Array>) {
     size += part.byteLength;
-    if (size > BODY_LIMIT) return fail('TOO_LARGE', TOO_LARGE);
+    if (size > limit) return tooLarge(limit);
     parts.push(part);
   }
   return ok(Buffer.concat(parts));
@@ -63,12 +64,16 @@ async function readForm(bytes: Uint8Array, type: string): Promise<Result<Sent>> 
     return fail('MALFORMED', 'The form cannot be read.');
   }
   const all = entries.filter((entry): entry is [string, string] => typeof entry[1] === 'string');
+  const files = entries.filter(
+    (entry): entry is [string, File] => entry[1] instanceof File && entry[1].size > 0,
+  );
   const own = (name: string) => all.find(([other]) => other === name)?.[1];
   const typed = all.filter(([name]) => !name.startsWith('_'));
   return ok({
     form: true,
     body: nested(gather(typed)),
     typed,
+    ...(files.length > 0 ? { files } : {}),
     version: own('_version'),
     key: own('_key'),
     back: own('_back'),
@@ -76,7 +81,7 @@ async function readForm(bytes: Uint8Array, type: string): Promise<Result<Sent>> 
   });
 }
 
-async function read(request: Request): Promise<Result<Sent>> {
+async function read(request: Request, limit: number): Promise<Result<Sent>> {
   const given = request.headers.get('content-type') ?? '';
   const type = (given.split(';')[0] ?? '').trim().toLowerCase();
   const isForm = FORM_TYPES.includes(type);
@@ -86,7 +91,7 @@ async function read(request: Request): Promise<Result<Sent>> {
       `A body of type "${type.slice(0, 80)}" is not taken here; send application/json or a form.`,
     );
   }
-  const bytes = await readBytes(request);
+  const bytes = await readBytes(request, limit);
   if (!bytes.ok) return bytes;
   if (type === '' && bytes.value.byteLength > 0) {
     return fail(
@@ -97,10 +102,10 @@ async function read(request: Request): Promise<Result<Sent>> {
   return isForm ? readForm(bytes.value, given) : readJson(bytes.value);
 }
 
-/** Reads the body once and keeps it at `locals.sent`, where the answer finds what was typed. */
-export async function readSent(context: Context): Promise<Result<Sent>> {
+/** Reads the body once and keeps it at `locals.sent`, where the answer finds what was typed. Forms with files give a limit of their own. */
+export async function readSent(context: Context, limit = BODY_LIMIT): Promise<Result<Sent>> {
   if (context.locals.sent) return ok(context.locals.sent);
-  const sent = await read(context.request);
+  const sent = await read(context.request, limit);
   if (sent.ok) context.locals.sent = sent.value;
   return sent;
 }

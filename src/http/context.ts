@@ -9,6 +9,8 @@ export type Sent = {
   body: unknown;
   /** The fields of a form as typed, without ours. */
   typed: [string, string][];
+  /** The files of a form that were really chosen, with the names of their fields. */
+  files?: [string, File][];
   version?: string | undefined;
   key?: string | undefined;
   back?: string | undefined;

@@ -146,6 +146,7 @@ export async function gateFacts(db: Db, file: CaseFile, today: string, hidden: b
       entries: entriesAsDomain(file.entries),
       discrepancies: discrepanciesAsDomain(file.discrepancies),
     },
+    barometer: file.site.barometer,
     authors: authorsOf(file),
     views: await looks(db, file),
     hidden,

@@ -1,6 +1,7 @@
 /* What a gate reads: the case and its records as plain data, gathered by the caller. */
 import { type Basis, type Path } from '@domain/basis';
 import { type Evaluation } from '@domain/evaluate';
+import { type Q } from '@engine/quantity';
 import { type FieldFacts } from '@domain/field/types';
 import { type OpenPoint } from '@domain/result';
 import { type Outcome, type RuleGate } from '@domain/rulebook/types';
@@ -78,6 +79,8 @@ export type GateFacts = {
   findings: readonly Finding[];
   dueItems: readonly DueItem[];
   field: FieldFacts;
+  /** Barometric pressure of the site, where a reading is absolute and what is signed is gauge. */
+  barometer?: Q;
   authors: readonly { person: Id; document: Id; sheet: SheetKey }[];
   /** First look at the originator's figures, a person and a document. */
   views: readonly { person: Id; document: Id; at: Instant }[];

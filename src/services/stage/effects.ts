@@ -3,6 +3,7 @@ import { voidSignature } from '@data/signatures';
 import { type Stage } from '@domain/case';
 import { carryOver } from './carry-over';
 import { makeDueItemsAfterStartUp, makeRequirements, makeStartUpPapers, signDeficiencies } from './due';
+import { makeStartUpReview } from './start-up';
 import { makeFieldLines } from './field-lines';
 import {
   approveRevisions,
@@ -35,6 +36,7 @@ async function voidSignatures(write: StageWrite): Promise<void> {
 
 async function startUpAndLines(write: StageWrite): Promise<void> {
   await makeStartUpPapers(write);
+  await makeStartUpReview(write);
   await makeFieldLines(write);
 }
 

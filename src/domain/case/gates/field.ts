@@ -1,6 +1,12 @@
 /* Gate of the field verification of one system: all seen, nothing differs, start-up items done. */
 import { monthsBetween } from '@domain/dates';
-import { faultsOfEntry, type Discrepancy, type FieldEntry, type FieldLine } from '@domain/field';
+import {
+  comparedEntry,
+  faultsOfEntry,
+  type Discrepancy,
+  type FieldEntry,
+  type FieldLine,
+} from '@domain/field';
 import { type OpenPoint } from '@domain/result';
 import { type DocumentFacts, type GateFacts, nameOf, placeIn, point } from '../gate-facts';
 import { type DueItem } from '../types';
@@ -32,14 +38,41 @@ export function installersOf(line: FieldLine, facts: Pick<GateFacts, 'field'>): 
     ]);
 }
 
+/** True when what was seen last on a line is what is signed there now. */
+function agreesNow(line: FieldLine, entry: FieldEntry | undefined, facts: GateFacts): boolean {
+  return (
+    entry !== undefined &&
+    comparedEntry(line, entry, facts.barometer && { barometer: facts.barometer })?.agrees === true
+  );
+}
+
+/** What was seen before the case went back and came again with other figures must be seen again. */
+function outdated(line: FieldLine, entry: FieldEntry, facts: GateFacts): string[] {
+  if (entry.seen === undefined || agreesNow(line, entry, facts)) return [];
+  const told = facts.field.discrepancies.some((each) => each.entry === entry.id || onLine(each, line, facts));
+  return told ? [] : [`${line.group}, ${line.label}: signed anew since it was seen; see it again.`];
+}
+
+/** A discrepancy of an earlier entry of the line that is still to be settled stands for every later one. */
+function onLine(each: Discrepancy, line: FieldLine, facts: Pick<GateFacts, 'field'>): boolean {
+  const entry = facts.field.entries.find((one) => one.id === each.entry);
+  return entry?.line === line.key && ['open', 'fixed', 'accepted'].includes(each.state);
+}
+
+/** A discrepancy is settled when it was seen again or accepted; one sent back, when what is signed now is what is there. */
+function isSettled(each: Discrepancy, line: FieldLine | undefined, facts: GateFacts): boolean {
+  if (SETTLED.includes(each.state)) return true;
+  return each.state === 'sent-back' && line !== undefined && agreesNow(line, entryOf(line, facts), facts);
+}
+
 function linePoints(line: FieldLine, of: DocumentFacts, facts: GateFacts): OpenPoint[] {
   const where = placeIn(facts, 'field', of, line.key);
   const entry = entryOf(line, facts);
-  if (!entry)
-    return [point('field-line-missing', `${line.group}, ${line.label.toLowerCase()}: not seen yet.`, where)];
-  const faults = faultsOfEntry(line, entry).map((sentence) =>
-    point('field-evidence-missing', sentence, where),
-  );
+  if (!entry) return [point('field-line-missing', `${line.group}, ${line.label}: not seen yet.`, where)];
+  const faults = [
+    ...faultsOfEntry(line, entry).map((sentence) => point('field-evidence-missing', sentence, where)),
+    ...outdated(line, entry, facts).map((sentence) => point('field-line-missing', sentence, where)),
+  ];
   const judges = facts.case.seats.filter(
     (seat) => !seat.until && ['originator', 'checker'].includes(seat.role),
   );
@@ -65,9 +98,13 @@ function discrepancyPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
     facts.field.entries.filter((entry) => keys.has(entry.line)).map((entry) => [entry.id, entry]),
   );
   return facts.field.discrepancies
-    .filter((each) => each.holds && mine.has(each.entry) && !SETTLED.includes(each.state))
-    .map((each) => {
-      const line = facts.field.lines.find((one) => one.key === mine.get(each.entry)?.line);
+    .filter((each) => each.holds && mine.has(each.entry))
+    .map((each) => ({
+      each,
+      line: facts.field.lines.find((one) => one.key === mine.get(each.entry)?.line),
+    }))
+    .filter(({ each, line }) => !isSettled(each, line, facts))
+    .map(({ each, line }) => {
       const sentence = `Discrepancy ${String(each.number)} (${line?.label ?? 'field sheet'}) holds start-up. ${each.clears}`;
       return point(
         'discrepancy-open',

@@ -1,0 +1,16 @@
+/* POST …/field/discrepancies/{k}/send-back: why the case must change. */
+import { type APIRoute } from 'astro';
+import { sendBackSchema } from '@services/field/bodies';
+import { sendBack } from '@services/field/discrepancies';
+import { answer, refuse, siteActor, writeOf } from '@/http/index';
+
+export const POST: APIRoute = async (context) => {
+  const number = context.params['number'] ?? '';
+  const sent = await writeOf(context, sendBackSchema, 'case');
+  const asked = siteActor(context);
+  if (!asked.ok) return refuse(context, asked.problem);
+  const { ctx, actor } = asked.value;
+  const at = { number, discrepancy: Number(context.params['k']) };
+  const result = await sendBack(ctx, actor, at, sent);
+  return answer(context, result, { back: `/s/${actor.site.slug}/cases/${number}/field` });
+};
