@@ -1,0 +1,17 @@
+/* Register of relief points, as CSV. */
+import { type APIRoute } from 'astro';
+import { pointsCsv } from '@services/views/register';
+import { refuse, siteActor } from '@/http';
+
+export const GET: APIRoute = async (context) => {
+  const at = siteActor(context);
+  if (!at.ok) return refuse(context, at.problem);
+  const { ctx, actor } = at.value;
+  return new Response(await pointsCsv(ctx, actor, context.url.searchParams), {
+    headers: {
+      'Content-Type': 'text/csv; charset=utf-8',
+      'Content-Disposition': `attachment; filename="${actor.site.slug}-relief-points.csv"`,
+      'Cache-Control': 'no-store',
+    },
+  });
+};
