@@ -1,16 +1,20 @@
 /* Signs people of the invented site in, by the list that the seed writes. */
 import { readFileSync } from 'node:fs';
 import { dirname, join } from 'node:path';
-import { type Role } from '@domain/case';
+import { type Role, ROLE_WORDS, ROLES } from '@domain/case';
 import { ensureTemplate } from './prepare';
 
 export type DemoPerson = { email: string; name: string; roles: Role[] };
 export type SignIns = { password: string; people: DemoPerson[] };
 
-/** The demonstration sign-ins, as the seed wrote them beside its database. */
+type Written = { password: string; people: (Omit<DemoPerson, 'roles'> & { roles: string[] })[] };
+
+/** The demonstration sign-ins, as the seed wrote them beside its database, where roles stand in words. */
 export async function demoSignIns(): Promise<SignIns> {
   const file = join(dirname(await ensureTemplate('demo')), 'sign-ins.json');
-  return JSON.parse(readFileSync(file, 'utf8')) as SignIns;
+  const { password, people } = JSON.parse(readFileSync(file, 'utf8')) as Written;
+  const rolesOf = (words: string[]) => ROLES.filter((role) => words.includes(ROLE_WORDS[role]));
+  return { password, people: people.map((person) => ({ ...person, roles: rolesOf(person.roles) })) };
 }
 
 /** The first person with a role. */
