@@ -1,13 +1,5 @@
 /* Answers of a scenario in a form: a new one, one that goes, the way its load or size is had, what it depends on. */
-import {
-  type Answer,
-  type Basis,
-  type Calc,
-  getAt,
-  type Op,
-  type Path,
-  type Scenario,
-} from '@domain/basis';
+import { type Answer, type Basis, type Calc, getAt, type Op, type Path, type Scenario } from '@domain/basis';
 import { newId } from '@data/ids';
 import { type Asked, own } from './fields';
 
@@ -22,8 +14,7 @@ export function wayOf(calc: Calc): string {
 /** A calculation had in another way; a change of method keeps the inputs entered so far. */
 function calcOf(way: string, before: Calc | undefined): Calc {
   const [by = 'none', rest = ''] = way.split(/:(.*)/s);
-  if (by === 'method')
-    return { by, method: rest, inputs: before?.by === 'method' ? before.inputs : {} };
+  if (by === 'method') return { by, method: rest, inputs: before?.by === 'method' ? before.inputs : {} };
   if (by === 'external') return { by, sheet: rest };
   if (by === 'given') return { by, figure: { unknown: 'not stated yet' } };
   return { by: 'none' };

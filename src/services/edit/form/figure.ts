@@ -17,7 +17,7 @@ import {
 } from '@domain/basis';
 import { type FieldError } from '@domain/result';
 import { methodById } from '@engine/catalog';
-import { type Dimension, dimensionOf, displayUnit, readTyped } from '@engine/quantity';
+import { type Dimension, dimensionOf, displayUnit, type Q, readTyped } from '@engine/quantity';
 import { type Asked } from './fields';
 
 export type Read = { ops: Op[]; errors: FieldError[] };
@@ -64,6 +64,14 @@ function sameOrigin(one: Origin | undefined, other: Origin | undefined): boolean
   return one?.kind === other?.kind && (one?.ref ?? '') === (other?.ref ?? '');
 }
 
+/** The quantity of what was typed; its digits are kept where they say more than the number does ("5.10"). */
+function withDigits(q: Q): Q {
+  const { value, unit } = q;
+  const digits = /^\S*/.exec(q.text ?? '')?.[0] ?? '';
+  const said = Number(digits) === value && digits !== '' && digits !== String(value);
+  return said ? { value, unit, text: digits } : { value, unit };
+}
+
 function sentence(document: Basis, path: Path, text: string): string {
   return `${capital(describePath(document, path).label)}: ${text}`;
 }
@@ -92,8 +100,13 @@ export function readFigure(document: Basis, path: Path, asked: Asked): Read {
   if (untouched && sameOrigin(origin, present.origin)) return NOTHING;
   const read = readTyped(text, { dimension: expects.dimension, unit });
   if (!read.ok)
-    return { ops: [], errors: [{ path, code: read.code, sentence: sentence(document, path, read.sentence) }] };
-  const q = untouched ? { value: present.value, unit, ...(present.text ? { text } : {}) } : read.q;
+    return {
+      ops: [],
+      errors: [{ path, code: read.code, sentence: sentence(document, path, read.sentence) }],
+    };
+  const q = untouched
+    ? { value: present.value, unit, ...(present.text ? { text } : {}) }
+    : withDigits(read.q);
   const value = { ...q, ...(origin ? { origin } : {}) };
   return { ops: [{ op: 'set', path, value, was: found ?? null }], errors: [] };
 }

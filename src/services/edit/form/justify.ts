@@ -11,12 +11,7 @@ type Typed = readonly (readonly [string, string])[];
 type By = { person: string; on: string };
 
 /** A justification of the outcome named by its hash; it takes the place of an older one for the same rule and place. */
-export function readJustification(
-  document: Basis,
-  outcomes: readonly Outcome[],
-  typed: Typed,
-  by: By,
-): Op[] {
+export function readJustification(document: Basis, outcomes: readonly Outcome[], typed: Typed, by: By): Op[] {
   const hash = own(typed, 'justify');
   const outcome = outcomes.find((one) => one.hash === hash);
   if (!outcome) return [];
@@ -47,4 +42,3 @@ export function readMadeOf(after: Basis, typed: Typed): Op[] {
       value: externalInputsHash(after, one),
     }));
 }
-

@@ -1,5 +1,14 @@
 /* A form about a document as operations on it: figures, words, dispositions, answers, justifications. */
-import { type Basis, applyOps, getAt, isFigure, type Op, type Path, splitPath, STATUSES } from '@domain/basis';
+import {
+  type Basis,
+  applyOps,
+  getAt,
+  isFigure,
+  type Op,
+  type Path,
+  splitPath,
+  STATUSES,
+} from '@domain/basis';
 import { fail, type FieldError, ok, type Result } from '@domain/result';
 import { type Outcome } from '@domain/rulebook';
 import { type Q } from '@engine/quantity';

@@ -20,7 +20,10 @@ function bare(schema: z.core.$ZodType | undefined): z.core.$ZodType | undefined 
 }
 
 /** What kind of value stands at a path. */
-export function kindAt(document: Basis, path: Path): 'figure' | 'rich' | 'flag' | 'number' | 'word' | undefined {
+export function kindAt(
+  document: Basis,
+  path: Path,
+): 'figure' | 'rich' | 'flag' | 'number' | 'word' | undefined {
   const schema = schemaAt(basisSchema, path);
   if (!schema) return undefined;
   const { leaf } = metaOf(schema);
@@ -71,7 +74,12 @@ export function readWord(document: Basis, path: Path, asked: Asked): Op[] {
 }
 
 /** The flags of a record (the statuses in which a scenario holds): every one is answered by the form. */
-export function readFlags(document: Basis, path: Path, names: readonly string[], all: readonly string[]): Op[] {
+export function readFlags(
+  document: Basis,
+  path: Path,
+  names: readonly string[],
+  all: readonly string[],
+): Op[] {
   const found = getAt(document, path) as Record<string, boolean> | undefined;
   const value = Object.fromEntries(all.map((name) => [name, names.includes(name)]));
   const same = all.every((name) => (found?.[name] ?? false) === value[name]);

@@ -17,7 +17,12 @@ export type BriefView = {
   texts: TextView[];
   papers: Paper[];
   noPapers: boolean;
-  seats: { role: Exclude<SeatRole, 'originator'>; legend: string; several: boolean; people: PersonChoice[] }[];
+  seats: {
+    role: Exclude<SeatRole, 'originator'>;
+    legend: string;
+    several: boolean;
+    people: PersonChoice[];
+  }[];
   affected: AffectedLine[];
   editable: boolean;
   whyNot?: string;

@@ -26,9 +26,7 @@ export function offeredOfEquipment(item: Equipment): Offered {
   const ratings = item.sides.flatMap((side) =>
     side.ratings.flatMap((one) => under(`${at}/sides/${side.id}/ratings/${one.id}`, ['mawp', 'at'])),
   );
-  const operating = sides.flatMap((side) =>
-    under(`${side}/operating`, ['normal', 'max', 'temperature']),
-  );
+  const operating = sides.flatMap((side) => under(`${side}/operating`, ['normal', 'max', 'temperature']));
   return {
     always: [...ratings, ...operating],
     present: [
@@ -71,7 +69,10 @@ export function offeredOfFluid(fluid: Fluid): Offered {
   const more = ['relativeDensity', 'muVapour', 'muLiquid', 'expansion', 'quality', 'omega', 'v0', 'v9'];
   return {
     always: under(at, always),
-    present: under(at, [...rest, ...more].filter((name) => !always.includes(name))),
+    present: under(
+      at,
+      [...rest, ...more].filter((name) => !always.includes(name)),
+    ),
   };
 }
 
@@ -108,7 +109,10 @@ function inputsOf(at: Path, calc: Calc): Offered {
   const names = [...new Set([...entered, ...required])];
   return {
     always: under(`${at}/inputs`, names),
-    present: under(`${at}/inputs`, optional.filter((name) => !names.includes(name))),
+    present: under(
+      `${at}/inputs`,
+      optional.filter((name) => !names.includes(name)),
+    ),
   };
 }
 

@@ -97,7 +97,7 @@ function fieldOf(of: Of, path: Path, prefix: string): FieldView[] {
   const figure = isFigure(found) ? found : undefined;
   const known = figure && isKnown(figure) ? figure : undefined;
   const word = isWordInput(found) && 'word' in found ? found.word : undefined;
-  const label = capital(describePath(of.document, path).label);
+  const label = capital(describePath(of.document, path).label).replaceAll('_', ' ');
   const unit = known?.unit ?? (isFigure(before) && isKnown(before) ? before.unit : undefined);
   const plain = typeof found === 'boolean' ? (found ? 'yes' : 'no') : String(found ?? '');
   return [
@@ -207,7 +207,10 @@ function documentsOf(of: OpenedCase, one: CaseDocumentFile): Of | undefined {
   const [document, base] = [one.after?.body ?? one.before?.body, one.before?.body];
   if (!document) return undefined;
   if (!of.hidden) return { document, base };
-  return { document: maskDocument(document, readingsOf(document)), base: base && maskDocument(base, readingsOf(base)) };
+  return {
+    document: maskDocument(document, readingsOf(document)),
+    base: base && maskDocument(base, readingsOf(base)),
+  };
 }
 
 /** What changes in one system of a case. UNKNOWN for a system that the case does not hold. */
@@ -232,7 +235,12 @@ export async function changesView(of: OpenedCase, tag: string | null): Promise<R
     ...(editable ? {} : { whyNot: why }),
     changed:
       one.before && one.after
-        ? differenceRows(one.before.body, one.after.body, (change) => `#${encodeURIComponent(change.path)}`, of.hidden)
+        ? differenceRows(
+            one.before.body,
+            one.after.body,
+            (change) => `#${encodeURIComponent(change.path)}`,
+            of.hidden,
+          )
         : [],
     sections: both ? sectionsOf(both) : [],
   });

@@ -63,7 +63,7 @@ function rowOf(change: Change, base: Basis, ours: Basis, href: string): Differen
   return {
     path: change.path,
     section: SECTION_WORDS[change.path.split('/')[0] ?? ''] ?? 'System',
-    where: capital(change.label),
+    where: capital(change.label).replaceAll('_', ' '),
     href,
     kind: KINDS[change.kind],
     ...(oldText === undefined ? {} : { old: oldText }),
@@ -99,7 +99,7 @@ export function differenceRows(
     return {
       path: change.path,
       section: SECTION_WORDS[change.path.split('/')[0] ?? ''] ?? 'System',
-      where: capital(masked.label),
+      where: capital(masked.label).replaceAll('_', ' '),
       href,
       kind: KINDS[change.kind],
       old: HIDDEN_WORD,

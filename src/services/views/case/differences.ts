@@ -51,11 +51,18 @@ const OUTPUTS: Readonly<Record<string, string>> = {
   relief_load: 'relief load',
   A_required: 'required area',
   P1: 'relieving pressure',
-  use: 'share of the installed area used',
+  use: 'used of the installed area',
+  total: 'total back pressure',
+  rated: 'rated capacity',
+  inletLoss: 'inlet loss',
+  builtUp: 'built-up back pressure',
+  required: 'required area',
+  installed: 'installed area',
   verdict: 'verdict',
 };
 /** Results that decide; the others are steps on the way and stand on their sheets. */
-const SHOWN = /#(relief_load|A_required|P1|use|verdict|rated|inlet_loss|total|built_up|required|installed|margin)$/;
+const SHOWN =
+  /^(?:sheets\/.*#(?:relief_load|A_required|P1|use|verdict)|groups\/.*#(?:use|required|installed)|points\/.*#(?!verdict)\w+)$/;
 
 function sheetName(doc: Basis, kind: string, subject: string, output: string): string {
   const [id = ''] = subject.split('/');
@@ -71,13 +78,19 @@ function resultName(doc: Basis, path: string): string {
   const [place = '', output] = path.split('#');
   const [list, id = ''] = place.split('/');
   const group = list === 'groups' ? doc.groups.find((one) => one.id === id) : undefined;
-  const name = group ? groupLabel(doc, group) : capital(describePath(doc, place).label);
+  const point = list === 'points' ? doc.reliefPoints.find((one) => one.id === id) : undefined;
+  const name = group ? groupLabel(doc, group) : (point?.tag ?? capital(describePath(doc, place).label));
   return `${name}, ${output === undefined ? 'verdict' : (OUTPUTS[output] ?? output.replaceAll('_', ' '))}`;
 }
 
 function valueWords(value: Q | string | undefined): string {
   if (value === undefined) return '–';
   return typeof value === 'string' ? value.replaceAll('-', ' ') : inline(shownQ(value));
+}
+
+function resultWords(path: string, value: Q | string | undefined): string {
+  if (!path.endsWith('#use') || value === undefined || typeof value === 'string') return valueWords(value);
+  return `${formatNumber(value.value * 100, 1)}\u00a0%`;
 }
 
 function shiftWords(shift: number | undefined): string {
@@ -88,8 +101,8 @@ function shiftWords(shift: number | undefined): string {
 function movedRow(doc: Basis, one: MovedResult): MovedRow {
   return {
     what: resultName(doc, one.path),
-    old: valueWords(one.old),
-    now: valueWords(one.now),
+    old: resultWords(one.path, one.old),
+    now: resultWords(one.path, one.now),
     shift: one.verdict ? '' : shiftWords(one.shift),
     strong: one.verdict,
   };

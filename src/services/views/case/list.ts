@@ -54,9 +54,7 @@ async function around(ctx: Ctx, rows: readonly CaseRow[]): Promise<Around> {
   const ids = rows.map((row) => row.id);
   const seats = await openSeatsOf(ctx.db, ids);
   const held = await Promise.all(ids.map((id) => caseDocuments(ctx.db, id)));
-  const documents = await findDocuments(ctx.db, [
-    ...new Set(held.flat().map((one) => one.documentId)),
-  ]);
+  const documents = await findDocuments(ctx.db, [...new Set(held.flat().map((one) => one.documentId))]);
   const people = await findPeople(ctx.db, [...new Set(seats.map((seat) => seat.personId))]);
   const tagOf = new Map(documents.map((one) => [one.id, one.tag]));
   return {

@@ -50,11 +50,7 @@ export function calcChoices(doc: Basis, labelOf: (doc: Basis, group: Group) => s
       ...externals(doc, 'load'),
       { value: 'none', label: 'not had yet' },
     ],
-    size: [
-      ...methods(SIZE_TOPICS),
-      ...externals(doc, 'size'),
-      { value: 'none', label: 'not sized here' },
-    ],
+    size: [...methods(SIZE_TOPICS), ...externals(doc, 'size'), { value: 'none', label: 'not sized here' }],
     fluids: doc.fluids.map((fluid) => ({ value: fluid.id, label: fluid.name })),
     groups: doc.groups.map((group) => ({ value: group.id, label: labelOf(doc, group) })),
   };
@@ -95,6 +91,10 @@ function answerView(now: Evaluated, scenario: Scenario, answer: Answer, hidden: 
 }
 
 /** The answers of a scenario; `doc` is masked where results are hidden. */
-export function answerViews(both: { now: Evaluated; doc: Basis }, scenario: Scenario, hidden: boolean): AnswerView[] {
+export function answerViews(
+  both: { now: Evaluated; doc: Basis },
+  scenario: Scenario,
+  hidden: boolean,
+): AnswerView[] {
   return scenario.answers.map((answer) => answerView(both.now, scenario, answer, hidden));
 }

@@ -78,7 +78,9 @@ export function rowFigures(
 
 function groupFigures(of: Evaluated | undefined, name: string, units: Units): number[] {
   if (!of) return [];
-  return of.body.groups.flatMap((group) => areaIn(figure(of.evaluation, `groups/${group.id}#${name}`), units) ?? []);
+  return of.body.groups.flatMap(
+    (group) => areaIn(figure(of.evaluation, `groups/${group.id}#${name}`), units) ?? [],
+  );
 }
 
 /** One scale for all bars: the installed area of the leading group, and the one before where it is another. */

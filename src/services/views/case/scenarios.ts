@@ -1,12 +1,5 @@
 /* The scenarios of a system in a case: the table with loads and areas, and what the form of each needs. */
-import {
-  type Basis,
-  capital,
-  plainText,
-  type Rich,
-  type Scenario,
-  STATUSES,
-} from '@domain/basis';
+import { type Basis, capital, plainText, type Rich, type Scenario, STATUSES } from '@domain/basis';
 import { can, isJustified, scenarioName, type DocumentFacts } from '@domain/case';
 import { type Evaluation } from '@domain/evaluate';
 import { maskDocument, maskOutcome, readingsOf } from '@domain/hidden';
@@ -105,7 +98,12 @@ function lineOf(both: Both, scenario: Scenario, number: number, hidden: boolean)
   };
 }
 
-function outcomeView(outcome: Outcome, facts: DocumentFacts | undefined, both: Both, least: number): OutcomeView {
+function outcomeView(
+  outcome: Outcome,
+  facts: DocumentFacts | undefined,
+  both: Both,
+  least: number,
+): OutcomeView {
   const text = both.doc.justifications.find(
     (one) => one.code === outcome.code && one.subject === outcome.subject && one.hash === outcome.hash,
   )?.text;
@@ -151,7 +149,9 @@ function scenarioView(of: OpenedCase, both: Both, scenario: Scenario, number: nu
     number,
     name: scenarioName(scenario),
     question: standard?.question ?? 'Can this cause load the relief device, and with how much?',
-    hint: standard ? `${capital(standard.state)}. Adds to other systems at a header: ${standard.headerNote}.` : '',
+    hint: standard
+      ? `${capital(standard.state)}. Adds to other systems at a header: ${standard.headerNote}.`
+      : '',
     disposition: scenario.disposition ?? '',
     statuses: STATUSES.filter((status) => scenario.statuses[status] === true),
     reason: scenario.reason,
@@ -167,7 +167,8 @@ function scenarioView(of: OpenedCase, both: Both, scenario: Scenario, number: nu
     ),
     answers: answerViews(both, scenario, of.hidden),
     outcomes: outcomes.map((outcome) => outcomeView(outcome, facts, both, of.facts.rules.reasonLength)),
-    changed: old !== undefined && JSON.stringify(old) !== JSON.stringify(scenarioOf(both.now.body, scenario.id)),
+    changed:
+      old !== undefined && JSON.stringify(old) !== JSON.stringify(scenarioOf(both.now.body, scenario.id)),
     bound: boundOf(both.doc, scenario),
   };
 }
@@ -226,4 +227,3 @@ export async function scenariosView(of: OpenedCase, tag: string | null): Promise
     choices: both ? calcChoices(both.doc, groupLabel) : { load: [], size: [], fluids: [], groups: [] },
   });
 }
-

@@ -9,7 +9,9 @@ export type SystemTab = { label: string; href: string; current: boolean };
 /** The system named in the address, else the first of the case. */
 export function systemOf(of: OpenedCase, tag: string | null): Result<CaseDocumentFile> {
   const one = tag === null || tag === '' ? of.file.documents[0] : documentOf(of.file, tag);
-  return one ? ok(one) : fail('UNKNOWN', `Case ${of.file.row.number} does not hold ${(tag ?? '').slice(0, 60)}.`);
+  return one
+    ? ok(one)
+    : fail('UNKNOWN', `Case ${of.file.row.number} does not hold ${(tag ?? '').slice(0, 60)}.`);
 }
 
 /** A tab for each system, when the case holds several. */
