@@ -2,6 +2,7 @@
 import { can, type Act, type On } from '@domain/case';
 import { type DueRow } from '@data/due';
 import { type Actor, whoOf } from '../context';
+import { dayWords } from '../views/days';
 import { DUE_ACTS, type DueAct } from './bodies';
 
 export type DueItemView = {
@@ -56,7 +57,7 @@ export function dueItemView(
     text: item.text,
     owner: of.nameOf(item.ownerId),
     asked: of.nameOf(item.askedBy),
-    due: item.due,
+    due: dayWords(item.due),
     late: item.state === 'open' && item.due < of.today,
     state: item.state,
     stateWords: STATE_WORDS[item.state],

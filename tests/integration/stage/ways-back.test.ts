@@ -185,7 +185,7 @@ describe('a return from the field', () => {
     value(await act(site, number, 'PASS-check', 'Ilse'));
     value(await act(site, number, 'SIGN', 'Grace'));
     const open = await pointsAt(site, number, 'field');
-    expect(open.some((point) => point.includes('signed anew since it was seen'))).toBe(true);
+    expect(open.some((point) => point.includes('is not what is signed now'))).toBe(true);
     expect(open.filter((point) => point.startsWith('start-up-action-open')).length).toBeGreaterThan(1);
     await seen(site, number);
     await startUpDone(site, number);

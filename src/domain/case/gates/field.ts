@@ -49,14 +49,21 @@ function agreesNow(line: FieldLine, entry: FieldEntry | undefined, facts: GateFa
 /** What was seen before the case went back and came again with other figures must be seen again. */
 function outdated(line: FieldLine, entry: FieldEntry, facts: GateFacts): string[] {
   if (entry.seen === undefined || agreesNow(line, entry, facts)) return [];
-  const told = facts.field.discrepancies.some((each) => each.entry === entry.id || onLine(each, line, facts));
-  return told ? [] : [`${line.group}, ${line.label}: signed anew since it was seen; see it again.`];
+  const told = facts.field.discrepancies.some(
+    (each) => each.entry === entry.id || onPlace(each, line, facts),
+  );
+  return told
+    ? []
+    : [`${line.group}, ${line.label}: what was seen last is not what is signed now; see it again.`];
 }
 
-/** A discrepancy of an earlier entry of the line that is still to be settled stands for every later one. */
-function onLine(each: Discrepancy, line: FieldLine, facts: Pick<GateFacts, 'field'>): boolean {
+/** A discrepancy on the same relief point that is still to be settled speaks for its other lines as well, until then. */
+function onPlace(each: Discrepancy, line: FieldLine, facts: Pick<GateFacts, 'field'>): boolean {
   const entry = facts.field.entries.find((one) => one.id === each.entry);
-  return entry?.line === line.key && ['open', 'fixed', 'accepted'].includes(each.state);
+  const other = facts.field.lines.find((one) => one.key === entry?.line);
+  if (other?.key === line.key) return ['open', 'fixed', 'accepted'].includes(each.state);
+  const place = (one: FieldLine): string => one.group.split(' · ')[0] ?? '';
+  return other !== undefined && place(other) === place(line) && ['open', 'fixed'].includes(each.state);
 }
 
 /** A discrepancy is settled when it was seen again or accepted; one sent back, when what is signed now is what is there. */
@@ -65,8 +72,13 @@ function isSettled(each: Discrepancy, line: FieldLine | undefined, facts: GateFa
   return each.state === 'sent-back' && line !== undefined && agreesNow(line, entryOf(line, facts), facts);
 }
 
-function linePoints(line: FieldLine, of: DocumentFacts, facts: GateFacts): OpenPoint[] {
-  const where = placeIn(facts, 'field', of, line.key);
+/** The block of the field sheet that shows a line; it opens by the line's key. */
+function placeOfLine(facts: GateFacts, line: FieldLine, anchor = `line-${String(line.order)}`): string {
+  return `cases/${facts.case.number}/field?line=${encodeURIComponent(line.key)}#${anchor}`;
+}
+
+function linePoints(line: FieldLine, facts: GateFacts): OpenPoint[] {
+  const where = placeOfLine(facts, line);
   const entry = entryOf(line, facts);
   if (!entry) return [point('field-line-missing', `${line.group}, ${line.label}: not seen yet.`, where)];
   const faults = [
@@ -106,16 +118,14 @@ function discrepancyPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
     .filter(({ each, line }) => !isSettled(each, line, facts))
     .map(({ each, line }) => {
       const sentence = `Discrepancy ${String(each.number)} (${line?.label ?? 'field sheet'}) holds start-up. ${each.clears}`;
-      return point(
-        'discrepancy-open',
-        sentence,
-        placeIn(facts, 'field', of, `discrepancy-${String(each.number)}`),
-      );
+      const anchor = `discrepancy-${String(each.number)}`;
+      const where = line ? placeOfLine(facts, line, anchor) : placeIn(facts, 'field', of, anchor);
+      return point('discrepancy-open', sentence, where);
     });
 }
 
 function startUpPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
-  const where = placeIn(facts, 'field', of, 'start-up');
+  const where = `cases/${facts.case.number}/field?at=start-up`;
   return facts.dueItems
     .filter((item) => item.case === facts.case.id && item.state === 'open')
     .filter((item) => !item.document || item.document === of.document)
@@ -155,7 +165,7 @@ export function fieldPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
     ...voidedPoints(facts, ['check', 'approval']),
     ...grade,
     ...movedBasis(of, facts),
-    ...lines.flatMap((line) => linePoints(line, of, facts)),
+    ...lines.flatMap((line) => linePoints(line, facts)),
     ...discrepancyPoints(of, facts),
     ...startUpPoints(of, facts),
     ...aged(facts, of),
