@@ -27,12 +27,19 @@ const FIGURE = new RegExp(
   'gu',
 );
 const LETTER = /\b(orifice|letter|orifice letter)\s+["“]?[D-HJ-NP-RT](?![\p{L}\d])/giu;
+const LETTER_BEFORE = /(?<![\p{L}\d])[D-HJ-NP-RT](?=[ -](?:orifice|letter)\b)/gu;
+/** Sizes of flanged valves, "2J3": inlet, orifice letter, outlet. */
+const SIZE = /(?<![\p{L}\d])\d+(?:½|\.\d)? ?[D-HJ-NP-RT] ?\d+(?![\p{L}\d])/gu;
+const COEFFICIENT = /\b([CK]v)(\s*(?:of|=)?\s*)\d+(?:[.,]\d+)*/gu;
 const VERDICT = /\b(inadequate|marginal|adequate)\b/giu;
 
-/** Prose with every number that has a unit or a percent sign, every orifice letter and every verdict taken out. */
+/** Prose with every number that has a unit or a percent sign, every orifice letter, flow coefficient and verdict taken out. */
 export function maskProse(text: string): string {
   return text
+    .replace(SIZE, HIDDEN_WORD)
+    .replace(COEFFICIENT, (_all, word: string, between: string) => `${word}${between}${HIDDEN_WORD}`)
     .replace(FIGURE, HIDDEN_WORD)
+    .replace(LETTER_BEFORE, HIDDEN_WORD)
     .replace(LETTER, (_all, word: string) => `${word} ${HIDDEN_WORD}`)
     .replace(VERDICT, HIDDEN_WORD);
 }

@@ -12,6 +12,7 @@ import {
   type SeatRole,
   type Stage,
 } from '@domain/case';
+import { maskProse } from '@domain/hidden';
 import { fail, ok, type OpenPoint, type Result } from '@domain/result';
 import { type CaseContext } from '@workflows/case';
 import { untilNextWrite } from '@data/memo';
@@ -238,7 +239,7 @@ export function frameOf(of: OpenedCase): CaseFrame {
   const seats = seatsOf(whoOf(actor), domainSeats(file.seats));
   return {
     number: file.row.number,
-    title: file.row.title,
+    title: of.hidden ? maskProse(file.row.title) : file.row.title,
     class: CLASS_WORDS[file.row.class] ?? file.row.class,
     stage: file.row.stage,
     stageWords: STAGE_WORDS[file.row.stage],
