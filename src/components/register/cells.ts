@@ -76,3 +76,20 @@ export function listItem(of: {
     '</li>',
   ].join('');
 }
+
+/** Rows of a view that is at hand are joined once. */
+function joinedOnce() {
+  const known = new WeakMap<object, string>();
+  return <L>(view: { rows: L[] }, markup: (line: L) => string): string => {
+    const before = known.get(view);
+    if (before !== undefined) return before;
+    const made = view.rows.map(markup).join('');
+    known.set(view, made);
+    return made;
+  };
+}
+
+/** The table rows of a register page. */
+export const rowsOf = joinedOnce();
+/** The list items of a register page on a phone. */
+export const itemsOf = joinedOnce();

@@ -37,6 +37,7 @@ const RESULTS: readonly RegExp[] = [
   /^lines\/[^/]+\/end\/(pressure|pressureMax)$/,
   /^lines\/[^/]+\/stability\//,
   /^justifications\/[^/]+\/values\//,
+  /^fieldConditions\/[^/]+\/requires\//,
 ];
 /** Text that is a name, a tag or a choice, not prose: it is left alone unless a pattern withholds it. */
 const PROSE =

@@ -21,7 +21,9 @@ import {
   systemScenarios,
   systemSheet,
   systemSheets,
+  type SystemFrame,
 } from '@services/views/system';
+import { type Result } from '@domain/result';
 import { dueView } from '@services/views/due';
 import { myWorkView } from '@services/views/my-work';
 import { searchView } from '@services/views/search';
@@ -143,10 +145,18 @@ describe('pages of a system before the unseen check', () => {
   };
 
   it.each(Object.entries(parts))('%s tells no result', async (_name, view) => {
-    const page = value(await view(demo.ctx, checker, HIDDEN, asked()));
+    const found: Result<{ frame: SystemFrame; view?: unknown }> = await view(
+      demo.ctx,
+      checker,
+      HIDDEN,
+      asked(),
+    );
+    const page = value(found);
     expect(page.frame.hidden).toBe(true);
     expect(page.view).toBeDefined();
     expect(JSON.stringify(page)).not.toMatch(LEAKS);
+    // The trim of LV-304 is a reading of the unseen check: the field condition may not give it away.
+    expect(JSON.stringify(page)).not.toMatch(/Cv 16|16 Cv/);
   });
 
   it('shows the same pages with results to another reader', async () => {
@@ -185,9 +195,7 @@ describe('pages of a system before the unseen check', () => {
     const evaluation = value(await systemEvaluation(demo.ctx, checker, HIDDEN));
     expect(evaluation.evaluation).toMatchObject({ hidden: true });
     expect(Object.keys(evaluation.evaluation)).toEqual(['hidden', 'sheets']);
-    expect(evaluation.outcomes.every((one) => Object.keys(one.values).length === 0 && one.hash === '')).toBe(
-      true,
-    );
+    expect(evaluation.outcomes).toEqual([]);
     expect(JSON.stringify(evaluation)).not.toMatch(LEAKS);
   });
 

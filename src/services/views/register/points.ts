@@ -3,10 +3,11 @@ import { ok, type Result } from '@domain/result';
 import { listDocuments } from '@data/documents';
 import { type Listed, listRegister, type PointRow, registerRowsOf } from '@data/registers';
 import { type Actor, type Ctx } from '../../context';
-import { hiddenOf } from '../../hidden-view';
+import { type Hidden, hiddenOf } from '../../hidden-view';
 import { aroundOf, type CaseLink, openCaseLinks, seenDocuments } from './around';
 import { type Ask, queryOf, readAsk } from './ask';
 import { type Cell, cellOf, sizedOf } from './figures';
+import { remembered } from './remembered';
 import { approvedCases, headed, pageOf, type RegisterView, type SystemLine, type Waiting } from './systems';
 
 export type PointLine = Omit<SystemLine, 'unit' | 'devices' | 'revision'> & {
@@ -80,6 +81,11 @@ export async function pointsView(
 ): Promise<Result<RegisterView<PointLine>>> {
   const ask = readAsk('points', search);
   const hidden = await hiddenOf(ctx, actor);
+  const asked = `points ${search.toString()}`;
+  return ok(await remembered(ctx, actor, hidden, asked, () => page(ctx, actor, hidden, ask)));
+}
+
+async function page(ctx: Ctx, actor: Actor, hidden: Hidden, ask: Ask): Promise<RegisterView<PointLine>> {
   const kind = { name: 'points', kindColumn: 'kind', anyKind: 'Any kind' } as const;
   const [around, found, headers] = await Promise.all([
     aroundOf(ctx, actor, hidden, kind),
@@ -94,5 +100,5 @@ export async function pointsView(
   };
   const lines = found.rows.map((row) => lineOf(row, actor.site.slug, ask, of));
   const path = `/s/${actor.site.slug}/register/relief-points`;
-  return ok({ ...pageOf<PointLine>(path, ask, around, found), ...headed(lines) });
+  return { ...pageOf<PointLine>(path, ask, around, found), ...headed(lines) };
 }

@@ -3,10 +3,11 @@ import { ok, type Result } from '@domain/result';
 import { findCases } from '@data/cases';
 import { type Listed, listRegister, registerRowsOf, type SystemRow } from '@data/registers';
 import { type Actor, type Ctx } from '../../context';
-import { hiddenOf } from '../../hidden-view';
+import { type Hidden, hiddenOf } from '../../hidden-view';
 import { addressOf, aroundOf, type CaseLink, openCaseLinks, seenDocuments, type Around } from './around';
 import { type Ask, PAGE_SIZE, queryOf, readAsk } from './ask';
 import { type Cell, headUnit, type Sized, sizedOf } from './figures';
+import { remembered } from './remembered';
 
 /** The approved truth of a row: what will hold once it is installed. */
 export type Waiting = Sized & { case?: CaseLink };
@@ -161,6 +162,11 @@ export async function systemsView(
 ): Promise<Result<RegisterView<SystemLine>>> {
   const ask = readAsk('systems', search);
   const hidden = await hiddenOf(ctx, actor);
+  const asked = `systems ${search.toString()}`;
+  return ok(await remembered(ctx, actor, hidden, asked, () => page(ctx, actor, hidden, ask)));
+}
+
+async function page(ctx: Ctx, actor: Actor, hidden: Hidden, ask: Ask): Promise<RegisterView<SystemLine>> {
   const kind = { name: 'systems', kindColumn: 'governingName', anyKind: 'Any scenario' } as const;
   const [around, found] = await Promise.all([
     aroundOf(ctx, actor, hidden, kind),
@@ -174,5 +180,5 @@ export async function systemsView(
   };
   const lines = found.rows.map((row) => lineOf(row, actor.site.slug, ask, of));
   const path = `/s/${actor.site.slug}/register/systems`;
-  return ok({ ...pageOf<SystemLine>(path, ask, around, found), ...headed(lines) });
+  return { ...pageOf<SystemLine>(path, ask, around, found), ...headed(lines) };
 }

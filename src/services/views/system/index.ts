@@ -103,7 +103,8 @@ export const systemSheets = partOf<{ groups: SheetGroup[] }>((of, seen) => ({
 export const systemLines = partOf<LinesView>(linesOf);
 
 /** Outcomes of the rulebook. */
-export const systemOutcomes = partOf<{ outcomes: OutcomeView[] }>(async (of, seen) => ({
+export const systemOutcomes = partOf<{ outcomes: OutcomeView[]; hidden: boolean }>(async (of, seen) => ({
+  hidden: of.hidden,
   outcomes: outcomesOf(of, seen, await writersOf(of, seen)),
 }));
 

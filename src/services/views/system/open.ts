@@ -1,7 +1,7 @@
 /* Opens a system for a reader: the revision that is shown, what follows from it, and what is withheld from them. */
 import { type Basis } from '@domain/basis';
 import { type Evaluation } from '@domain/evaluate';
-import { maskDocument, maskOutcome, readingsOf } from '@domain/hidden';
+import { maskDocument, readingsOf } from '@domain/hidden';
 import { type Outcome } from '@domain/rulebook';
 import { type SiteRules } from '@domain/rules';
 import { fail, ok, type Result } from '@domain/result';
@@ -15,7 +15,7 @@ import { type Actor, type Ctx, instant } from '../../context';
 import { evaluateRevision } from '../../evaluate-document';
 import { hiddenOf } from '../../hidden-view';
 
-/** A revision as the reader may see it: of a hidden document the body is masked and there is no evaluation at all. */
+/** A revision as the reader may see it: of a hidden document the body is masked, and there is neither an evaluation nor an outcome. */
 export type Seen = { revision: RevisionRow; body: Basis; evaluation?: Evaluation; outcomes: Outcome[] };
 
 export type OpenedSystem = {
@@ -47,7 +47,8 @@ export async function seenOf(
   if (!worked) return undefined;
   const { body, evaluation, outcomes } = worked;
   if (!of.hidden) return { revision, body, evaluation, outcomes };
-  return { revision, body: maskDocument(body, readingsOf(body)), outcomes: outcomes.map(maskOutcome) };
+  // Which rule speaks, and on what, would tell the result as well as its figures do.
+  return { revision, body: maskDocument(body, readingsOf(body)), outcomes: [] };
 }
 
 async function find(ctx: Ctx, actor: Actor, tag: string): Promise<Result<DocumentRow>> {
