@@ -31,9 +31,13 @@ export function methodGroups(): MethodGroup[] {
   }));
 }
 
-/** All methods, for programs. */
-export function methodList(): MethodView[] {
-  return METHODS.map(viewOf);
+/** Who asks, with the roles of all their sites. */
+export type Asker = Pick<Who, 'id'> & { roles: readonly Role[] };
+
+/** All methods, for programs of those whose roles calculate. */
+export function methodList(who: Asker): Result<{ methods: MethodView[] }> {
+  const answer = can(who, 'calculate', { seats: [] });
+  return answer.ok ? ok({ methods: METHODS.map(viewOf) }) : fail(answer.code, answer.sentence);
 }
 
 /** One method by its id. */
@@ -64,7 +68,7 @@ function unitErrors(inputs: SentInputs) {
  * there, NOT_PERMITTED for someone whose roles do not calculate at any site, SCHEMA for a unit that does not exist.
  */
 export function calculate(
-  who: Pick<Who, 'id'> & { roles: readonly Role[] },
+  who: Asker,
   asked: { topic: string; inputs: SentInputs; edition?: string | undefined },
 ): Result<Worked> {
   const answer = can(who, 'calculate', { seats: [] });
