@@ -6,6 +6,9 @@ import react from '@astrojs/react';
 import tailwind from '@astrojs/tailwind';
 import { POLICY } from './src/http/policy.mjs';
 
+/** Files of engine, domain and workflows. */
+const PURE = /[\\/](?:src[\\/](?:engine|domain)|workflows)[\\/]/;
+
 /** The Node adapter with our own entry: the adapter's starts listening before the database is migrated and never stops cleanly. */
 function nodeWithOurServer() {
   const adapter = node({ mode: 'standalone', experimentalDisableStreaming: true });
@@ -32,7 +35,11 @@ export default defineConfig({
   // Astro writes the hashes of its island bootstrap into the policy, so nothing needs 'unsafe-inline'.
   experimental: { csp: { directives: POLICY } },
   vite: {
-    build: { assetsInlineLimit: 0 },
+    build: {
+      assetsInlineLimit: 0,
+      // The pure layers do nothing when they are loaded: what an island does not use of them stays out of its script.
+      rollupOptions: { treeshake: { moduleSideEffects: (id) => !PURE.test(id) } },
+    },
     ssr: { external: ['better-sqlite3', 'knex', '@node-rs/argon2'] },
   },
 });
