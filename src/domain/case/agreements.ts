@@ -1,5 +1,6 @@
 /* Which sheets a checker must agree, and which agreements still hold at the present hash. */
 import { type Sheet } from '@domain/evaluate';
+import { sheetLabel } from '@domain/projections';
 import { type OpenPoint } from '@domain/result';
 import { type DocumentFacts, type GateFacts, placeIn, point } from './gate-facts';
 import { type SheetKey } from './types';
@@ -32,14 +33,15 @@ export function agreementPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[
     const state = agreementOf(of, sheet.key, facts);
     if (state === 'agreed') return [];
     const where = placeIn(facts, `sheets/${encodeURIComponent(sheet.key)}`, of);
+    const name = of.doc ? sheetLabel(of.doc, sheet.key) : sheet.key;
     return state === 'stale'
       ? [
           point(
             'agreement-stale',
-            `The sheet ${sheet.key} of ${of.tag} changed after it was agreed: look at it again.`,
+            `${of.tag}, ${name}: this sheet changed after it was agreed. Look at it again.`,
             where,
           ),
         ]
-      : [point('sheet-not-agreed', `The sheet ${sheet.key} of ${of.tag} is not agreed yet.`, where)];
+      : [point('sheet-not-agreed', `${of.tag}, ${name}: this sheet is not agreed yet.`, where)];
   });
 }
