@@ -151,7 +151,7 @@ function comparedRow(
   const { item, entry, theirs, compared } = each;
   const { deviation } = compared;
   const words = typeof theirs === 'string' || deviation === undefined;
-  const sign = (deviation ?? 0) > 0 ? '+' : '';
+  const sign = (deviation ?? 0) >= 0.0005 ? '+' : '';
   return {
     entry: entry.id,
     what: item.label,

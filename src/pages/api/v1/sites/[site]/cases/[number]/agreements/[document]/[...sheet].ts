@@ -4,9 +4,14 @@ import { z } from 'zod';
 import { ACT_BODIES } from '@domain/case';
 import { agreeSheet, type SheetAt, undoAgreement } from '@services/check/agree';
 import { answer, refuse, siteActor, viaForm, writeOf } from '@/http/index';
+import { sheetKeyOf } from '@/http/sheet-key';
 
 function sheetAt({ params }: APIContext): SheetAt {
-  return { number: params['number'] ?? '', document: params['document'] ?? '', sheet: params['sheet'] ?? '' };
+  return {
+    number: params['number'] ?? '',
+    document: params['document'] ?? '',
+    sheet: sheetKeyOf(params['sheet']),
+  };
 }
 
 function backTo(slug: string, at: SheetAt): string {
