@@ -75,6 +75,12 @@ function symbolOf(name: string): string | undefined {
   return found[2] ? `${found[1]}_{\\mathrm{${found[2]}}}` : found[1];
 }
 
+/** What an input was taken from: another sheet by its title, a field of the basis by its words. */
+function labelAt(one: CaseDocumentFile, path: string): string {
+  if (path.startsWith('sheets/')) return sheetTitle(one, path.slice(7).split('#')[0] ?? '');
+  return describePath(one.after?.body ?? {}, path).label;
+}
+
 function inputsOf(of: OpenedCase, one: CaseDocumentFile, sheet: Sheet): SheetInput[] {
   const declared = methodById(sheet.method.split('@')[0] ?? '')?.inputs ?? [];
   return Object.entries(sheet.inputs).map(([name, value]) => {
@@ -83,7 +89,7 @@ function inputsOf(of: OpenedCase, one: CaseDocumentFile, sheet: Sheet): SheetInp
     const origin = path === undefined ? undefined : originAt(one, path);
     const place = path === undefined ? undefined : placeOf(of, `${one.document.id}:${path}`);
     const meaning = declared.find((input) => input.name === name)?.meaning ?? name.replaceAll('_', ' ');
-    const label = path === undefined || !one.after ? undefined : describePath(one.after.body, path).label;
+    const label = path === undefined ? undefined : labelAt(one, path);
     const { text, unit } = shownValue(value);
     return {
       ...(symbol === undefined ? {} : { symbol }),
