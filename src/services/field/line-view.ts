@@ -34,6 +34,8 @@ export type FieldLineView = {
   cannot?: { means: string; second: string };
   /** Number of the discrepancy on the line that counts. */
   discrepancy?: number;
+  /** It must be seen again: what is signed has changed since, or the photograph is missing. */
+  again: boolean;
 };
 
 /** Units of the same kind that a plate is likely to carry, the line's own first. */
@@ -113,6 +115,11 @@ function seenSide(of: LineOf, entry: FieldEntry): Partial<FieldLineView> {
   };
 }
 
+function mustSeeAgain({ line, entry, discrepancy }: LineOf, agrees: boolean | undefined): boolean {
+  if (!entry || entry.as === 'installer' || discrepancy !== undefined) return false;
+  return agrees === false || (line.photo && entry.files.length === 0);
+}
+
 /** The line for the reader. */
 export function lineView(of: LineOf): FieldLineView {
   const { line, entry, open, barometer } = of;
@@ -126,6 +133,7 @@ export function lineView(of: LineOf): FieldLineView {
     ask: askView(line),
     photo: line.photo,
     photographs: [],
+    again: mustSeeAgain(of, agrees),
     state,
     ...(entry && state !== 'to-see' ? { by: of.nameOf(entry.by), at: of.timeOf(entry.saw) } : {}),
     ...(of.discrepancy === undefined ? {} : { discrepancy: of.discrepancy }),

@@ -148,7 +148,7 @@ function blocksOf(reading: Reading): FieldBlock[] {
       };
       const view = lineFor(reading, line);
       block.lines.push(view);
-      block.toSee += view.state === 'to-see' ? 1 : 0;
+      block.toSee += view.state === 'to-see' || view.again ? 1 : 0;
       block.differs += view.discrepancy === undefined ? 0 : 1;
       blocks.set(at, block);
     }
