@@ -7,9 +7,11 @@ export function lookOf(...texts: Prose[]): RichLook {
   const figures = texts.flatMap((text) => text.figures);
   return {
     figure: (attrs) => {
-      const found = figures.find((one) => one.path === attrs['path']);
+      const found = figures.find(
+        (one) => one.path === attrs['path'] && one.side === attrs['side'] && one.doc === attrs['doc'],
+      );
       if (!found) return undefined;
-      const { path: _path, ...figure } = found;
+      const { path: _path, side: _side, doc: _doc, ...figure } = found;
       return figure;
     },
   };

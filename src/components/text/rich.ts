@@ -1,5 +1,6 @@
 /* Renders a stored rich text to HTML: only known nodes and marks come out, all text is escaped, figures follow their sheets. */
 import { type Rich } from '@domain/basis';
+import { formatQuantity } from '@engine/quantity';
 import { escapeText } from '../pictures/draw';
 
 /** What a live figure of the text says today. */
@@ -55,9 +56,13 @@ function tag(name: string, attributes: string, content: string): string {
   return `<${name}${attributes}>${content}</${name}>`;
 }
 
+/** The figure as it was affirmed, in the digits that the text asks for. */
 function affirmed(attrs: Bag): string {
-  const q = bag(attrs['affirmed']);
-  return words(q['text']) || [words(q['value']), words(q['unit'])].filter((part) => part !== '').join(' ');
+  const { value, unit, text } = bag(attrs['affirmed']);
+  if (typeof value !== 'number' || typeof unit !== 'string') return words(text) || words(value);
+  const decimals = attrs['decimals'];
+  const q = { value, unit, ...(typeof text === 'string' ? { text } : {}) };
+  return formatQuantity(q, typeof decimals === 'number' ? { decimals } : {});
 }
 
 function figure(attrs: Bag, look: RichLook): string {

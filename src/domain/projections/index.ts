@@ -10,5 +10,5 @@ export {
   type SystemRow,
   type Truth,
 } from './rows';
-export { sheetLabel } from './sheet-label';
+export { SHEET_KINDS, sheetLabel } from './sheet-label';
 export { kindOf, projectSystem, type SystemProjection } from './system';

@@ -2,7 +2,8 @@
 import { type Basis } from '@domain/basis';
 import { scenarioLabel, scenarioOfKey } from './read';
 
-const KINDS: Readonly<Record<string, string>> = {
+/** What each kind of sheet works, by the first part of its key. */
+export const SHEET_KINDS: Readonly<Record<string, string>> = {
   limit: 'Allowed and relieving pressure',
   load: 'Relief load',
   size: 'Required area',
@@ -24,7 +25,7 @@ export function sheetLabel(doc: Basis, key: string): string {
   const at = key.indexOf(':');
   const [kind, rest] = [key.slice(0, at), key.slice(at + 1)];
   const [id = '', answerId] = rest.split('/');
-  const words = KINDS[kind] ?? kind;
+  const words = SHEET_KINDS[kind] ?? kind;
   const scenario = ['limit', 'load', 'size'].includes(kind) ? scenarioOfKey(doc, key) : undefined;
   if (scenario) {
     const answer = scenario.answers.find((one) => one.id === answerId)?.name;

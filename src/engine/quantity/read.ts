@@ -102,13 +102,12 @@ export function readTyped(text: string, expected: Expected): ReadResult {
     return fail('NOT_A_NUMBER', `${number} can be read two ways. Write ${value[0]} or ${value[1]}.`);
   if (value === undefined || !Number.isFinite(value))
     return fail('NOT_A_NUMBER', `"${number}" is not a number. Write a number ${example}.`);
-  return withUnit(value, number, typed, typed.slice(match[0].length).trim(), takes, expected.unit);
+  return withUnit(value, number, typed.slice(match[0].length).trim(), takes, expected.unit);
 }
 
 function withUnit(
   value: number,
   number: string,
-  text: string,
   word: string,
   takes: readonly Dimension[],
   usual: string,
@@ -129,5 +128,6 @@ function withUnit(
       `${unitLabel(key) || 'No unit'} measures ${got}; this is ${wanted}, usually in ${unitLabel(usual) || 'plain numbers'}.`,
     );
   }
-  return { ok: true, q: { value, unit: key, text } };
+  // The digits as typed say how exactly they are known; the unit stands beside them.
+  return { ok: true, q: { value, unit: key, text: number.trim() } };
 }

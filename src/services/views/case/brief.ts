@@ -8,8 +8,17 @@ import { approversNeeded } from '../../gate-facts';
 import { maskRich, maskProse } from '@domain/hidden';
 import { affectedView, type AffectedLine } from './affected';
 import { type OpenedCase } from './open';
+import { type Prose, proseOf } from './prose';
 
-export type TextView = { name: keyof Brief; label: string; hint: string; rich: Rich; plain: string };
+/** One text of the brief: the stored text for the editor, and as it reads with its live figures. */
+export type TextView = {
+  name: keyof Brief;
+  label: string;
+  hint: string;
+  rich: Rich;
+  plain: string;
+  prose: Prose;
+};
 export type PersonChoice = { value: string; label: string; note?: string; chosen: boolean };
 export type BriefView = {
   title: string;
@@ -83,7 +92,7 @@ function textsOf(of: OpenedCase): TextView[] {
   return TEXTS.map((text) => {
     const stored = brief[text.name] as Rich;
     const rich = of.hidden ? maskRich(stored) : stored;
-    return { ...text, rich, plain: plainText(rich) };
+    return { ...text, rich, plain: plainText(rich), prose: proseOf(of, stored, of.file.documents[0]) };
   });
 }
 

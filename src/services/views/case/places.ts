@@ -2,7 +2,7 @@
 import { describePath } from '@domain/basis';
 import { placeOfPath } from '@domain/case';
 import { maskEvaluation } from '@domain/hidden';
-import { scenarioLabel, scenarioOfKey } from '@domain/projections';
+import { scenarioLabel, sheetLabel } from '@domain/projections';
 import { type CaseDocumentFile } from '../../case-file';
 import { type OpenedCase } from './open';
 import { baseOf, plainOf, sheetHref } from './prose';
@@ -10,19 +10,6 @@ import { baseOf, plainOf, sheetHref } from './prose';
 export type Place = { label: string; href: string };
 export type PlaceChoice = { value: string; label: string; group: string };
 
-const KINDS: Record<string, string> = {
-  limit: 'Limit and relieving pressure',
-  load: 'Relief load',
-  size: 'Required area',
-  rated: 'Rated capacity',
-  inlet: 'Inlet line',
-  outlet: 'Outlet line',
-  cold: 'Cold differential test pressure',
-  force: 'Reaction force',
-  noise: 'Noise',
-  opening: 'Opening of the group',
-  header: 'Header',
-};
 const BRIEF: Record<string, string> = {
   title: 'Title',
   whatChanges: 'What changes',
@@ -32,16 +19,9 @@ const BRIEF: Record<string, string> = {
   papers: 'Procedures and drawings',
 };
 
-/** What a sheet is called: what it works, and for which scenario or relief point. */
+/** What a sheet of the case is called. */
 export function sheetTitle(one: CaseDocumentFile, key: string): string {
-  const [kind = '', rest = ''] = [key.slice(0, key.indexOf(':')), key.slice(key.indexOf(':') + 1)];
-  const body = one.after?.body;
-  const scenario = body && scenarioOfKey(body, key);
-  const point = body?.reliefPoints.find((each) => each.id === rest.split('/')[0]);
-  const group = body?.groups.find((each) => each.id === rest);
-  const about = scenario && body ? scenarioLabel(body, scenario) : (point?.tag ?? group?.name ?? rest);
-  const answer = scenario?.answers.find((each) => each.id === rest.split('/')[1])?.name;
-  return [`${KINDS[kind] ?? kind}: ${about}`, answer].filter(Boolean).join(', ');
+  return one.after ? sheetLabel(one.after.body, key) : key;
 }
 
 /** Keys of the sheets that a reader may know of; while hidden only those that the scenarios tell anyone. */

@@ -7,8 +7,16 @@ import { type CaseDocumentFile } from '../../case-file';
 import { presentFigure } from '../../stale';
 import { type OpenedCase } from './open';
 
-/** A live figure of a text, by its path: as the text says it, and what stands there now where that is something else. */
-export type ProseFigure = { path: string; text: string; sheet?: string; href?: string; now?: string };
+/** A live figure of a text, by its path and side: as the text says it, and what stands there now where that is something else. */
+export type ProseFigure = {
+  path: string;
+  side: string;
+  doc: string;
+  text: string;
+  sheet?: string;
+  href?: string;
+  now?: string;
+};
 export type Prose = { rich: Rich; figures: ProseFigure[] };
 
 /** The address below which the parts of a case lie. */
@@ -36,6 +44,8 @@ export function proseOf(of: OpenedCase, rich: Rich | undefined, one?: CaseDocume
     const now = typeof present === 'object' ? formatQuantity(present) : (present ?? 'nothing');
     return {
       path,
+      side: node.attrs.side,
+      doc,
       text: formatQuantity(affirmed, decimals === undefined ? {} : { decimals }),
       ...(key !== undefined && own ? { sheet: `sheet ${key}`, href: sheetHref(of, own, key) } : {}),
       ...(moved ? { now } : {}),

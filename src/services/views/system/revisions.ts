@@ -1,4 +1,5 @@
 /* Revisions of a system: the list, and what differs between two of them, in words and in results. */
+import { sheetLabel } from '@domain/projections';
 import { type Basis, isFigure, isFields, isRich, plainText } from '@domain/basis';
 import { type Change, difference, movedResults } from '@domain/difference';
 import { maskChange, maskProse } from '@domain/hidden';
@@ -9,7 +10,6 @@ import { dayAt } from '../days';
 import { inline, originWords, shownFigure } from '../shown';
 import { baseOf } from './frame';
 import { type OpenedSystem, type Seen, seenOf } from './open';
-import { sheetName } from './sheets';
 
 export type RevisionLine = {
   name: string;
@@ -150,7 +150,7 @@ function movedRows(from: Seen, to: Seen): DifferenceLine[] {
   const shown = movedResults(from.evaluation, to.evaluation).filter((one) => TOLD.test(one.path));
   return shown.map((moved) => {
     const [key = '', output = ''] = moved.path.replace(/^sheets\//, '').split('#');
-    const where = `${sheetName(to.body, key)}: ${OUTPUTS[output] ?? output}`;
+    const where = `${sheetLabel(to.body, key)}: ${OUTPUTS[output] ?? output}`;
     const old = valueWords(moved.old);
     const now = valueWords(moved.now);
     return {

@@ -2,7 +2,7 @@
 import { type Basis, describePath, getAt, isFields, type Origin } from '@domain/basis';
 import { type Sheet, type Verdict } from '@domain/evaluate';
 import { maskEvaluation } from '@domain/hidden';
-import { scenarioLabel, scenarioOfKey } from '@domain/projections';
+import { scenarioLabel, SHEET_KINDS, sheetLabel } from '@domain/projections';
 import { methodById } from '@engine/catalog';
 import { fail, ok, type Result } from '@domain/result';
 import { type SheetWarning, type Step } from '@engine/sheet';
@@ -22,18 +22,6 @@ export type SheetLine = {
 };
 export type SheetGroup = { id: string; name: string; lines: SheetLine[] };
 
-const KIND_WORDS: Record<string, string> = {
-  limit: 'Allowed and relieving pressure',
-  load: 'Relief load',
-  size: 'Required area',
-  rated: 'Rated capacity',
-  inlet: 'Inlet pressure loss',
-  outlet: 'Back pressure',
-  cold: 'Cold differential test pressure',
-  force: 'Reaction force',
-  noise: 'Noise',
-  opening: 'Opening',
-};
 /** The output by which each kind of sheet is known. */
 const LEAD: Record<string, readonly string[]> = {
   limit: ['relieving_pressure', 'MAAP'],
@@ -46,17 +34,6 @@ const LEAD: Record<string, readonly string[]> = {
 };
 
 const kindOfKey = (key: string) => key.slice(0, key.indexOf(':'));
-
-/** What a sheet is called: "Required area, loss of cooling water". */
-export function sheetName(doc: Basis, key: string): string {
-  const kind = kindOfKey(key);
-  const words = KIND_WORDS[kind] ?? kind;
-  const scenario = ['limit', 'load', 'size'].includes(kind) ? scenarioOfKey(doc, key) : undefined;
-  if (scenario) return `${words}, ${scenarioLabel(doc, scenario).toLowerCase()}`;
-  const id = key.slice(kind.length + 1).split('/')[0];
-  const point = doc.reliefPoints.find((one) => one.id === id);
-  return point ? `${words}, ${point.tag}` : words;
-}
 
 function methodWords(method: string): string {
   const found = methodById(method);
@@ -81,7 +58,7 @@ function lineOf(of: OpenedSystem, seen: Seen, sheet: Sheet): SheetLine {
   return {
     key: sheet.key,
     href: sheetHref(of, sheet.key),
-    name: KIND_WORDS[kindOfKey(sheet.key)] ?? sheet.key,
+    name: SHEET_KINDS[kindOfKey(sheet.key)] ?? sheet.key,
     method: methodWords(sheet.method),
     result: sheet.refused ? '–' : leadOf(sheet),
     note: sheet.refused?.text ?? sheet.warnings.map((one) => one.text).join(' '),
@@ -91,7 +68,7 @@ function lineOf(of: OpenedSystem, seen: Seen, sheet: Sheet): SheetLine {
 }
 
 function hiddenLine(of: OpenedSystem, key: string): SheetLine {
-  const name = KIND_WORDS[kindOfKey(key)] ?? key;
+  const name = SHEET_KINDS[kindOfKey(key)] ?? key;
   return { key, href: sheetHref(of, key), name, method: '', result: '', note: '', hidden: true };
 }
 
@@ -171,7 +148,7 @@ function fromWords(
   if (path === undefined) return {};
   if (path.startsWith('sheets/')) {
     const key = path.slice('sheets/'.length).split('#')[0] ?? '';
-    return { origin: `from the sheet “${sheetName(doc, key)}”`, href: sheetHref(of, key) };
+    return { origin: `from the sheet “${sheetLabel(doc, key)}”`, href: sheetHref(of, key) };
   }
   if (path.startsWith('site/')) return { origin: 'of the site' };
   const origin = originAt(doc, path);
@@ -219,7 +196,7 @@ export function sheetView(of: OpenedSystem, seen: Seen, key: string): Result<She
   const nothing = { inputs: [], steps: [], outputs: [], warnings: [], hash: '' };
   if (!seen.evaluation) {
     if (!hiddenKeys(seen.body).includes(key)) return missing;
-    return ok({ key, name: sheetName(seen.body, key), method: '', hidden: true, ...nothing });
+    return ok({ key, name: sheetLabel(seen.body, key), method: '', hidden: true, ...nothing });
   }
   const sheet = seen.evaluation.sheets[key];
   if (!sheet) return missing;
@@ -227,7 +204,7 @@ export function sheetView(of: OpenedSystem, seen: Seen, key: string): Result<She
   const verdict = conclusionOf(seen, key);
   return ok({
     key,
-    name: sheetName(seen.body, key),
+    name: sheetLabel(seen.body, key),
     method: `${methodWords(sheet.method)} (${sheet.method})`,
     ...(method ? { methodHref: `/s/${of.actor.site.slug}/methods/${method.id}` } : {}),
     ...(sheet.edition === undefined ? {} : { edition: sheet.edition }),
