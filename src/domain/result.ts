@@ -66,13 +66,21 @@ export function statusOf(code: ProblemCode): number {
   return PROBLEM_STATUS[code];
 }
 
-type ZodIssue = { path: PropertyKey[]; code: string; message: string };
+type ZodIssue = { path: PropertyKey[]; code: string; message: string; keys?: readonly string[] };
+
+/** Schemas give their own sentences; only for a field that none of them knows zod speaks itself. */
+function sentenceOf(issue: ZodIssue): string {
+  const { keys = [] } = issue;
+  if (issue.code !== 'unrecognized_keys' || keys.length === 0) return issue.message;
+  const names = keys.map((key) => `"${key.slice(0, 60)}"`).join(', ');
+  return keys.length === 1 ? `There is no field ${names} here.` : `There are no fields ${names} here.`;
+}
 
 /** Turns the complaints of a zod schema into field errors; a path is joined by slashes, the root is empty. */
 export function fieldErrors(issues: readonly ZodIssue[]): FieldError[] {
   return issues.map((issue) => ({
     path: issue.path.map(String).join('/'),
     code: issue.code,
-    sentence: issue.message,
+    sentence: sentenceOf(issue),
   }));
 }

@@ -41,6 +41,18 @@ function changesBetween(old: Brief, next: Brief): { path: string; old?: unknown;
     .map((name) => ({ path: `brief/${name}`, old: old[name], new: next[name] }));
 }
 
+/** What stands now, whole for a program, and field by field in plain words for a form. */
+function presentOf(brief: Brief): Record<string, unknown> {
+  const { title, timeNeeded, whatChanges, technicalBasis, effect } = brief;
+  const texts = Object.entries({ whatChanges, technicalBasis, effect });
+  return {
+    brief,
+    title,
+    timeNeeded,
+    ...Object.fromEntries(texts.map(([name, text]) => [name, plainText(text)])),
+  };
+}
+
 /** Saves fields of the brief at the version that was read. STALE carries the present brief, so that both sides can be shown. */
 export async function editBrief(
   ctx: Ctx,
@@ -55,7 +67,7 @@ export async function editBrief(
   if (!sent.body.ok) return sent.body;
   if (!sent.version.ok) return sent.version;
   if (file.row.version !== sent.version.value)
-    return stale(`The brief of ${number}`, file.row.version, { brief: file.row.brief });
+    return stale(`The brief of ${number}`, file.row.version, presentOf(file.row.brief));
   const next = merged(file, sent.body.value);
   if (!next.ok) return next;
   const brief = next.value;
