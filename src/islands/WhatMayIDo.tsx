@@ -14,6 +14,8 @@ type Props = {
   base: string;
   /** Act → address, where a form is elsewhere than in the part that usually holds it. */
   links?: Readonly<Record<string, string>>;
+  /** The page lists the open points of the gate beside it already. */
+  pointsBeside?: boolean;
 };
 
 /** The machine comes after the page: what is possible is told before any of it runs, and stands if it never comes. */
@@ -46,13 +48,13 @@ function OpenPoints({ machine, base }: Pick<Props, 'machine' | 'base'>) {
 }
 
 /** The list of acts, in sentences. */
-export function WhatMayIDo({ acts, machine, base, links }: Props) {
+export function WhatMayIDo({ acts, machine, base, links, pointsBeside = false }: Props) {
   const inBrowser = useInBrowser();
   const { now, later, never, notNow } = sortActs(acts);
   const list = (next?: ReadonlyMap<string, string>) => (
     <ActList acts={now} base={base} links={links} next={next} linked />
   );
-  const waits = later.some(({ code }) => code === 'GATE_SHUT');
+  const waits = !pointsBeside && later.some(({ code }) => code === 'GATE_SHUT');
   return (
     <div className="may">
       <h3>You may now</h3>

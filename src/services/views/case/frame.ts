@@ -19,7 +19,9 @@ import { untilNextWrite } from '@data/memo';
 import { domainSeats, nameIn, onFile, type CaseFile } from '../../case-file';
 import { today, whoOf, type Actor, type Ctx } from '../../context';
 import { contextOf } from '../../stage/stage-act';
+import { idleActs } from './idle';
 import { type OpenedCase, openCase } from './open';
+import { cellsOf } from './title-cells';
 
 export type RailStageView = { name: string; note?: string };
 export type RailGateView = {
@@ -60,6 +62,8 @@ export type CaseFrame = {
   parts: PartView[];
   gate: GateView | null;
   acts: ActAnswer[];
+  /** Acts that are permitted, with nothing in the case to do them on. */
+  idle: Act[];
   seats: SeatView[];
   documents: FrameDocument[];
   yourSeats: SeatRole[];
@@ -193,42 +197,6 @@ const GATE_ACT: Partial<Record<Stage, Act>> = {
   field: 'ISSUE',
 };
 
-function cellsOf(of: OpenedCase, base: string): CaseFrame['cells'] {
-  const { file } = of;
-  const own = file.documents[0];
-  const revision = own?.base?.number;
-  const originator = file.seats.find((one) => one.role === 'originator' && !one.untilAt);
-  const seats = seatsOf(whoOf(of.actor), domainSeats(file.seats));
-  const system = own
-    ? `${own.document.tag}${revision == null ? '' : ` rev ${String(revision)}`}${file.documents.length > 1 ? ` and ${String(file.documents.length - 1)} more` : ''}`
-    : '–';
-  return [
-    {
-      label: file.documents.length > 1 ? 'Systems' : 'System',
-      fact: system,
-      href: own ? `/s/${file.site.slug}/systems/${own.document.tag}` : base,
-    },
-    { label: 'Originator', fact: originator ? nameIn(file, originator.personId) : '–' },
-    {
-      label: 'Raised',
-      fact: new Intl.DateTimeFormat('en-GB', {
-        timeZone: file.site.timeZone,
-        day: 'numeric',
-        month: 'short',
-        year: 'numeric',
-      }).format(new Date(file.row.raisedAt)),
-      num: true,
-    },
-    {
-      label: 'You are',
-      fact:
-        seats.length > 0
-          ? capital(seats.map((seat) => SEAT_WORDS[seat].replace(/^(the|an) /, '')).join(', '))
-          : 'Reading',
-    },
-  ];
-}
-
 /** The frame of an opened case. */
 export function frameOf(of: OpenedCase): CaseFrame {
   const { file, facts, actor } = of;
@@ -250,6 +218,7 @@ export function frameOf(of: OpenedCase): CaseFrame {
     parts: partsOf(of, base),
     gate: gateView(of, points),
     acts: actsFor(whoOf(actor), onFile(file), act ? { [act]: points } : {}),
+    idle: idleActs(of),
     seats: file.seats
       .filter((one) => !one.untilAt)
       .map((one) => ({

@@ -61,7 +61,7 @@ function whereOf(of: OpenedCase, row: TrailRow, path: string): string {
   );
   const inside = path.slice(path.indexOf(':') + 1);
   if (document && (path.includes(':') || getAt(document.after?.body ?? {}, path) !== undefined))
-    return placeOf(of, `${document.document.id}:${inside}`).label;
+    return placeOf(of, `${document.document.id}:${inside}`).label.replaceAll('_', ' ');
   const [list = '', id = ''] = path.split('/');
   if (list === 'findings') return `Finding ${id}`;
   if (list === 'unseen') return `Unseen check, ${path.slice(7)}`;
