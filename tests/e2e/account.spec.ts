@@ -152,7 +152,7 @@ test.describe('the account', () => {
 
   test('the ground that is chosen stays', async ({ browser, server }) => {
     const [context, page] = await signedIn(browser, server, auditor);
-    await page.getByText('Dark', { exact: true }).click();
+    await page.getByRole('radio', { name: 'Dark' }).check();
     await page.getByRole('button', { name: 'Use it' }).click();
     await expect(page.locator('html')).toHaveAttribute('data-theme', 'dark');
     await page.goto('/account');

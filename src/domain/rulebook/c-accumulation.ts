@@ -21,7 +21,8 @@ export const accumulationAboveLimit = rule(
     code: 'accumulation-above-limit',
     subject: 'scenario',
     statement: '{scenario} takes {equipment} to {p1}, above the allowed {maap}.',
-    condition: 'P_relief > maap(mawp, basis, class, n); P_relief = what the sheet used, not what was typed',
+    condition:
+      'The relieving pressure that the sheet used, not the one typed, is above the allowed accumulated pressure for the MAWP, the code basis, the kind of scenario and the number of devices.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-125(c) [S]; PED Annex I 7.3 [M]',
@@ -62,7 +63,7 @@ export const accumulationLimitMisused = rule(
     subject: 'scenario',
     statement: '{scenario} uses the {x} % limit, which is only for {what}.',
     condition:
-      '116 % with fewer than two required devices counted, or with sets outside the 105 % rule; 121 % for a scenario that is not fire; installed spare counted as second device',
+      '116 % with fewer than two required devices counted, or with set pressures outside the 105 % rule; 121 % for a scenario that is not fire; an installed spare counted as the second device.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-125(c)(1),(2) [S]',
@@ -81,7 +82,8 @@ export const enLimitExceeded = rule(
     code: 'en-limit-exceeded',
     subject: 'scenario',
     statement: "Under the EN basis {scenario} may not exceed 110 % of PS, or the site's fire limit {f} %.",
-    condition: 'basis = EN and: non-fire P_relief > 1.10·PS, or fire > enFireLimit·PS',
+    condition:
+      'The code basis is EN and the relieving pressure is above 110 % of PS, or in fire above the site’s own limit.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'PED 2014/68/EU Annex I 2.11.2, 7.3, 2.12 [M]',
@@ -107,7 +109,7 @@ export const storageLimitMisused = rule(
     statement:
       'The 120 % limit is only for ambient storage of liquefied compressed gas in fire, and {equipment} is not that.',
     condition:
-      'limit 1.20 chosen and (equipment is not storage of non-refrigerated liquefied gas, or has a permanent supply connection, or device tolerance is not −0/+10 %)',
+      'The 120 % limit is chosen and the equipment does not store liquefied gas without refrigeration, or has a permanent supply connection, or the tolerance of the device is not −0/+10 %.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-125(c)(3), UG-134(d)(2) (2015) [S]',
@@ -139,7 +141,7 @@ export const testPressureLimitUsed = rule(
     subject: 'scenario',
     statement: '{scenario} is judged against the corrected test pressure instead of the accumulation limit.',
     condition:
-      'acceptance = corrected-test-pressure: allowed scenarios tube-rupture, check-valve-reverse-flow (latent), inadvertent-valve-opening of a locked valve; needs test pressure and stress ratio; (b) any other scenario, or those figures absent',
+      'The scenario is accepted against the corrected test pressure. Tube rupture, reverse flow through a latent check valve and a locked valve opened by mistake may be, with test pressure and stress ratio given; others may not.',
     severity: 'justify',
     gate: 'scenarios',
     source: 'API 521 5th 3.21, 4.3.4.2, 5.19 as quoted publicly [S]; 6th/7th [M]',

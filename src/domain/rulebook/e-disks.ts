@@ -27,7 +27,7 @@ export const diskBurstAboveLimit = rule(
     subject: 'device',
     statement: '{device} can be marked to burst at {pmax}, above its limit {lim}.',
     condition:
-      'top of manufacturing range (or marked burst) at coincident temperature, plus constant back pressure, > setLimit (MAWP alone; 1.05 / 1.10 by place)',
+      'The top of the manufacturing range, or the marked burst pressure, at the temperature that goes with it and with the constant back pressure, is above what the disk’s place allows: MAWP alone, else 105 or 110 %.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-127(a)(1), UG-134(a) [S]',
@@ -56,7 +56,7 @@ export const diskOperatingRatio = rule(
     subject: 'device',
     statement: '{equipment} operates at {x} % of the lowest pressure at which {device} may burst.',
     condition:
-      "pop_max / (bottom of range − burstTol) > ratio; burstTol = 2 psi (15 kPa) to 40 psi (300 kPa), 5 % above; ratio 0.70 plain, 0.70–0.80 graphite/composite, 0.85 scored, 0.90 reverse-acting, or maker's",
+      'The highest operating pressure, on the bottom of the range less the burst tolerance (2 psi or 15 kPa up to 40 psi or 300 kPa, 5 % above), is more than 70 % for plain disks, 70 to 80 % for graphite and composite, 85 % for scored, 90 % for reverse-acting, or the maker’s own ratio.',
     severity: 'justify',
     gate: 'scenarios',
     source: 'tolerance ASME VIII-1 2015 UG-134(e) [S]; ratios trade practice, maker governs [M]',
@@ -100,7 +100,7 @@ export const diskCombinationFactor = rule(
     subject: 'device',
     statement: '{device} under a disk is sized with Kc = {kc} without a certified combination.',
     condition:
-      'disk upstream: Kc > 0.90 and no certified pair, or certified pair lists another disk or valve model than the document',
+      'With a disk upstream, the combination factor is above 0.90 without a certified pair, or the certified pair names another disk or valve than stands here.',
     severity: 'stop',
     gate: 'scenarios',
     source: '0.9 default ; older text 0.8 (Ludwig, trade practice) [P]',
@@ -121,7 +121,7 @@ export const diskSpaceUnmonitored = rule(
     subject: 'device',
     statement: 'Nothing shows whether pressure has built up between the disk and {device}.',
     condition:
-      'disk below a valve and none of gauge, try cock, free vent, tell-tale/alarm; disk alone in two-disk series likewise',
+      'A disk stands below a valve, or two disks in series, and the space between has no gauge, try cock, free vent or tell-tale with alarm.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-127(a)(3)(b) [M], same wording for pin devices [S]',
@@ -144,7 +144,8 @@ export const diskObstructsValve = rule(
     code: 'disk-obstructs-valve',
     subject: 'device',
     statement: 'The disk under {device} can fragment or is smaller than the valve inlet.',
-    condition: 'disk type fragmenting below a valve, or disk minimum net flow area < valve inlet area',
+    condition:
+      'The disk below the valve can fragment, or its smallest net flow area is less than the inlet of the valve.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-127(a)(3) [M]',
@@ -164,7 +165,8 @@ export const diskValvePressureGap = rule(
     code: 'disk-valve-pressure-gap',
     subject: 'device',
     statement: 'The disk bursts at {pb} and the valve is set at {ps}: they should be within 90–110 %.',
-    condition: "pb/ps < 0.90 or > 1.10 (never above the disk's own limit)",
+    condition:
+      'The burst pressure is below 90 % or above 110 % of the set pressure. It is never above the disk’s own limit.',
     severity: 'justify',
     gate: 'scenarios',
     source: 'combination testing practice ASME VIII-1 UG-132/XIII [M]',

@@ -32,7 +32,7 @@ export const capacityShort = rule(
     subject: 'group',
     statement: '{scenario} needs {req}, and {group} offers {inst}.',
     condition:
-      "A_req > A_inst or W_req > Σ W_rated at the scenario's P1 (in-breathing: volume flow at the allowed vacuum); devices out of service or spare excluded",
+      'The required area is larger than the installed, or the load larger than the rated capacities together at the relieving pressure (for in-breathing: the volume flow at the allowed vacuum). Devices out of service and spares do not count.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-125, UG-133 [S]; API 2000 for tanks [S]',
@@ -51,7 +51,7 @@ export const capacityMarginal = rule(
     code: 'capacity-marginal',
     subject: 'group',
     statement: '{scenario} uses {x} % of {group}: within the limit, with little in hand.',
-    condition: 'marginalFrom ≤ use ≤ 1.00',
+    condition: 'From the site’s share of the installed area up to all of it is used.',
     severity: 'note',
     gate: 'approval',
     source: '[P]: chart reading ±2–3 %, loads ±10 %; one letter step is 21–78 % in area [S]',
@@ -74,7 +74,7 @@ export const lowLoadChatter = rule(
     statement:
       'The smallest credible load is {x} % of what {device} passes: a pop-action valve may cycle or chatter.',
     condition:
-      'pop action, compressible or liquid: min credible non-thermal load / W_rated(first device) < 0.25; or governing load < 0.30 (the sentence then says “even the governing load”)',
+      'For pop action: the smallest credible load, thermal expansion aside, is below a quarter of what the first device passes, or even the governing load is below 30 %.',
     severity: 'justify',
     gate: 'check',
     source: 'trade practice (flow < ~25 % rated) [M]; [P]',
@@ -107,7 +107,7 @@ export const groupMissing = rule(
     subject: 'scenario',
     statement: '{scenario} is credible but no group of devices answers it.',
     condition:
-      'disposition credible and group empty, and not (answeredBy = other-measure with scenario kind jet fire, deflagration, surge, volatile ingress)',
+      'The scenario is credible and no group answers it, unless another measure does, for a jet fire, deflagration, surge or volatile ingress.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-125(a)(1) [S]',
@@ -129,7 +129,7 @@ export const spareCredited = rule(
     code: 'spare-credited',
     subject: 'group',
     statement: '{device} is an installed spare behind a closed valve and is counted as capacity.',
-    condition: 'any counted device has service = spare or its isolation is normally closed',
+    condition: 'A device that is counted is in service as a spare, or its isolation is normally closed.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-135(d)(1) [S]; [P]',
@@ -159,7 +159,7 @@ export const areaKindMixed = rule(
     subject: 'device',
     statement: 'Effective and actual areas are mixed in the sizing of {device}.',
     condition:
-      'required area from effective coefficient (0.975 / 0.65 / 0.62) compared with actual area, or certified K with effective letter area',
+      'A required area from the effective coefficients (0.975, 0.65, 0.62) is compared with an actual area, or a certified coefficient goes with the effective area of a letter.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 526 6th/7th: effective areas valid only with API 520 equations [S]',

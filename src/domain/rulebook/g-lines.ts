@@ -19,7 +19,7 @@ export const inletLossHigh = rule(
     subject: 'inlet line',
     statement: 'The inlet loss of {device} is {x} % of set, above {lim} %.',
     condition:
-      'spring devices and pilots sensed at the valve: loss/set > 0.03; exempt: remotely sensed pilot; device whose only scenario is thermal expansion (site choice)',
+      'For spring valves and pilots sensed at the valve: the loss is above 3 % of set. Exempt are pilots sensed remotely and, by the site’s choice, devices for thermal expansion only.',
     severity: 'justify',
     gate: 'scenarios',
     source:
@@ -56,7 +56,8 @@ export const inletLossNearBlowdown = rule(
     code: 'inlet-loss-near-blowdown',
     subject: 'inlet line',
     statement: 'The inlet loss of {device} is so near its blowdown that it cannot stay open.',
-    condition: '(a) loss/set ≥ blowdown − 0.02; (b) EN basis: loss/set > blowdown/3',
+    condition:
+      'The loss on set pressure comes within 2 % of the blowdown; under EN it is above a third of the blowdown.',
     severity: 'stop',
     gate: 'scenarios',
     source: '[P], force balance; EN ISO 4126-9: ≤ 3 % or ⅓ of blowdown [M]',
@@ -89,7 +90,7 @@ export const lineLossMissing = rule(
     subject: 'inlet line',
     statement: 'No loss is calculated for the {side} line of {device}.',
     condition:
-      'line present (length > 0 or any fitting) and no sheet, or sheet older than device, fluid or line data',
+      'There is a line, with length or fittings, and no sheet for it, or the sheet is older than the data of device, fluid or line.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'trade practice; API 520-2 [M]',

@@ -12,7 +12,7 @@ export const isolationUnlocked = rule(
     subject: 'device',
     statement: '{valve} has no lock or seal, or no number in the lock register.',
     condition:
-      'isolation in inlet or outlet path without lock kind, number and keeper; three-way/changeover: without position statement',
+      'An isolation in the inlet or outlet path has no kind of lock, number or keeper; a changeover valve has no statement of its position.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'App. M; locks and chains accepted [S]; API 576 seal lesson',
@@ -45,7 +45,7 @@ export const isolationRestricts = rule(
     subject: 'device',
     statement: '{valve} in the relief path of {device} is not full bore.',
     condition:
-      'port area < line area and (a) its loss is counted at rated flow and capacity is kept; (b) it is not',
+      'The port of the valve is smaller than the line. It asks for a reason where its loss is counted at the rated flow and the capacity is kept, and stops where not.',
     severity: 'justify',
     gate: 'scenarios',
     source:
@@ -88,7 +88,7 @@ export const cdtpMissing = rule(
     subject: 'device',
     statement: '{device} needs a cold setting, because of {reason}, and none is given.',
     condition:
-      "spring: (T_relief > 66 °C or maker's threshold, or constant superimposed > 0 on a conventional valve) and CDTP blank",
+      'A spring valve relieves above 66 °C or the maker’s threshold, or is conventional under constant superimposed back pressure, and the CDTP is blank.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 520-1 definition [M]; threshold 66 °C/150 °F [M]',
@@ -121,7 +121,7 @@ export const cdtpMismatch = rule(
     statement:
       'CDTP {c} does not follow from set {set}, back pressure {b} and temperature factor {f}: {calc}.',
     condition:
-      'abs(CDTP − (set − sc_conventional)·f) > 0.5·setTol; subtraction for balanced or pilot valves fires the same code',
+      'The CDTP differs, by more than half the set tolerance, from set pressure less constant superimposed back pressure (conventional valves only) times the temperature factor. Taking it off for a balanced or pilot valve is the same mistake.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'method h.set-tolerance; API 520-1 [M]',
@@ -150,7 +150,7 @@ export const bonnetVentWrong = rule(
     subject: 'device',
     statement: 'The bonnet vent of {device} is {state}; a balanced valve needs it open to a safe place.',
     condition:
-      'balanced: vent ∉ {open, piped to safe place}, or toxic fluid and vent local; conventional in closed system: bonnet plug not stated',
+      'On a balanced valve the vent is neither open nor piped to a safe place, or is local with a toxic fluid; on a conventional valve in a closed system the plug of the bonnet is not stated.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'SPS 341 App. C UG-127: vent the bonnet of balanced valves [S]; API 520-1 [M]',

@@ -29,7 +29,8 @@ export const kOutsideRange = rule(
     code: 'k-outside-range',
     subject: 'fluid',
     statement: 'k = {k} of {fluid} is outside {lo}–{hi}, or is a real-gas ratio used in the ideal formula.',
-    condition: 'k ≤ 1.00 or > 1.667 refuse; 1.00–1.05 warn; ideal formula with k flagged real-gas',
+    condition:
+      'k is 1.00 or less, or above 1.667 (impossible); or between 1.00 and 1.05; or is marked as a real-gas ratio and goes into the ideal formula.',
     severity: 'justify',
     gate: 'check',
     source:
@@ -54,7 +55,7 @@ export const zOutsideRange = rule(
     subject: 'fluid',
     statement: 'Z = {z}: outside {lo}–{hi} the ideal nozzle formula can be far off.',
     condition:
-      'Z < 0.80 or Z > 1.10 with ideal formula; 0.30–0.80 also asks for isentropic exponent or integration',
+      'Z is below 0.80 or above 1.10 with the ideal formula. From 0.30 to 0.80 it also asks for an isentropic exponent or an integration.',
     severity: 'justify',
     gate: 'check',
     source: 'API 520-1 Annex B range 0.8–1.1 [M]',
@@ -97,7 +98,7 @@ export const densityInconsistent = rule(
     subject: 'fluid',
     statement: 'Density, pressure, temperature, molar mass and Z of {fluid} do not agree ({x} %).',
     condition:
-      'abs(ρ·Z·R·T/(P·M) − 1) > 0.03 (R = 8314.46 J/(kmol·K)); liquid: ρ and ρ(relative)·999 differ > 1 %',
+      'Gas: density, Z, temperature, pressure and molar mass depart from the gas law by more than 3 %. Liquid: density and relative density differ by more than 1 %.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ideal identity [P]',
@@ -119,7 +120,7 @@ export const latentHeatLow = rule(
     code: 'latent-heat-low',
     subject: 'fluid',
     statement: 'The latent heat of {fluid} is {l} kJ/kg, below the floor for near-critical liquids.',
-    condition: 'λ < 115 kJ/kg (50 Btu/lb) used in W = Q/λ',
+    condition: 'A latent heat below 115 kJ/kg (50 Btu/lb) divides the heat input.',
     severity: 'justify',
     gate: 'check',
     source: 'trade practice [P]',
@@ -146,7 +147,7 @@ export const stateNotAtRelief = rule(
     subject: 'fluid',
     statement: 'The properties of {fluid} are at {T},{P}, not at the relieving conditions of {scenario}.',
     condition:
-      'abs(P_fluid/P1 − 1) > 0.02 or abs(T_fluid − T1) > 5 K; name, equation of state or source missing',
+      'The pressure of the fluid’s state is more than 2 %, or its temperature more than 5 K, from the relieving conditions; or name, equation of state or source is missing.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 520-1 [M]; [P] tolerances',

@@ -16,7 +16,7 @@ export const phaseMismatch = rule(
     subject: 'scenario',
     statement: '{scenario} is sized as {a} but {fluid} is {b} at relief.',
     condition:
-      'method family ≠ phase at (P1,T1); vapour fraction 0<x<1 with a single-phase method; liquid with Psat(T1) > P2 (or > choke pressure) sized as liquid',
+      'The method is for another phase than the fluid has at relieving conditions, or for one phase where there are two, or for liquid that flashes on its way through the valve.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 520-1 Annex C 10th [M]; chooser rule trade practice',
@@ -41,7 +41,7 @@ export const correctionFactorMissing = rule(
     subject: 'scenario',
     statement: '{factor} is left at 1 although {why}.',
     condition:
-      'Kv = 1 and Re < 100 000; KSH = 1 and steam > Tsat + 5 K; KN = 1 and 1 500 psi < P1 (10 339 kPa) ≤ 3 200 psi; Kb/Kw = 1 beyond onset; F2 absent when subcritical; Kp absent when op ≠ 25 % in the non-certified liquid method; Kc = 1 with disk',
+      'A factor stands at 1, or is absent, where it should act: viscosity below a Reynolds number of 100 000; superheat more than 5 K above saturation; the Napier correction from 1 500 to 3 200 psi; back pressure beyond its onset; the subcritical coefficient; overpressure other than 25 % for valves without liquid certificate; a disk upstream.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 520-1 7th–10th [M]; method b, c',
@@ -70,7 +70,7 @@ export const reactionDataMissing = rule(
     subject: 'scenario',
     statement: '{scenario} is a reaction case without calorimetry or a stated equivalent.',
     condition:
-      'scenario ∈ {runaway-reaction, reaction-upset}, credible, and no reference of kind calorimetry; or foamy/level-swell flag blank',
+      'A runaway or an upset reaction is credible and no reference of the kind calorimetry stands here, or nothing says whether the contents foam or swell.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'HSE CRR 136/1998, DIERS [P]',

@@ -34,7 +34,8 @@ export const fireDrainageUnsupported = rule(
     subject: 'scenario',
     statement:
       'The lower heat-input constant is used for {equipment} without drainage and prompt fire-fighting on record.',
-    condition: 'C = 43 200 (21 000 US) and adequateDrainage not referenced; else 70 900 (34 500)',
+    condition:
+      'The constant for adequate drainage (43 200; US 21 000) is used and drainage is not referenced. Without it the constant is 70 900 (34 500).',
     severity: 'stop',
     gate: 'scenarios',
     source: 'trade practice; API 521 [M]; NFPA 30 drainage factors must not be combined',
@@ -67,7 +68,7 @@ export const fireInsulationCredit = rule(
     subject: 'scenario',
     statement: '{equipment} takes credit F = {F}, and nothing shows the insulation survives.',
     condition:
-      'F < 1 from insulation without: intact to 904 °C (1 660 °F) for 2 h, not removed by hose stream, banding; or credit for water spray or depressuring (F must be 1); F < 0.026 or a second reduction multiplied',
+      'Insulation earns a factor below 1 without being shown to last two hours at 904 °C (1 660 °F) and to withstand a hose stream, with banding; or water spray or depressuring earns credit; or the factor is below 0.026, or a second one is multiplied in.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'trade practice (≤ 4.0 Btu/(h·ft²·°F), hose stream); API 521 F table [M]',
@@ -95,7 +96,7 @@ export const fireZoneMissing = rule(
     subject: 'scenario',
     statement: 'Fire is credible for {equipment} but it belongs to no fire zone.',
     condition:
-      '(a) fire credible and fireZone blank: header cases cannot be summed; (b) zone area outside 230–460 m²',
+      'Fire is credible and the fire zone is blank, so that header scenarios cannot be summed; or the area of the zone is outside 230 to 460 m².',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 521 zone 230–460 m² quoted [S]',

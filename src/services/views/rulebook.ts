@@ -1,14 +1,52 @@
 /* The rulebook as a page: every rule with its condition, its severity, the gate where it is first asked, and its parameter. */
-import { RULEBOOK, type RuleFacts } from '@domain/rulebook';
+import { RULEBOOK, type RuleFacts, type RuleGate } from '@domain/rulebook';
 import { ok, type Result } from '@domain/result';
+import { PARAMETERS } from '@domain/rules';
+import { formatNumber } from '@engine/quantity';
 import { rulesOf } from '../case-file';
 import { type Actor, type Ctx } from '../context';
 
 export type RuleLine = Omit<RuleFacts, 'parameter' | 'inheritable'> & {
-  parameter?: { key: string; value: string };
+  parameter?: { meaning: string; value: string };
   inheritable: boolean;
+  /** The code as words. */
+  name: string;
+  /** The stage that is left at the gate where the rule is first asked. */
+  asked: string;
 };
 export type RulebookView = { rules: RuleLine[]; number: number };
+
+const CAPITALS: Record<string, string> = { mawp: 'MAWP', cdtp: 'CDTP', en: 'EN', z: 'Z', k: 'k' };
+const ASKED: Record<RuleGate, string> = {
+  draft: 'draft',
+  scenarios: 'scenario analysis',
+  check: 'calculation check',
+  approval: 'approval',
+  field: 'field verification',
+  removal: 'due for removal',
+  'in-kind': 'replacement in kind',
+  watch: 'while in force',
+};
+
+function nameOf(code: string): string {
+  const words = code.split('-').map((word) => CAPITALS[word] ?? word);
+  const name = words.join(' ');
+  return code.startsWith('k-') ? name : name.charAt(0).toUpperCase() + name.slice(1);
+}
+
+function limitOf(key: string, given: number | string | boolean | undefined): RuleLine['parameter'] {
+  const parameter = PARAMETERS.find((one) => one.key === key);
+  const value = given ?? parameter?.default;
+  if (!parameter || value === undefined) return undefined;
+  const { meaning, unit } = parameter;
+  if (typeof value === 'boolean') return { meaning, value: value ? 'yes' : 'no' };
+  if (typeof value === 'string') return { meaning, value };
+  if (/^fraction|^of |^share/.test(unit)) {
+    const of = unit.replace(/^fraction ?/, '');
+    return { meaning, value: `${formatNumber(value * 100, undefined)}\u00a0%${of === '' ? '' : ` ${of}`}` };
+  }
+  return { meaning, value: `${formatNumber(value)}${unit === '-' || unit === '' ? '' : `\u00a0${unit}`}` };
+}
 
 /** Every rule, with the value that the site rules give its parameter. */
 export async function rulebookView(ctx: Ctx, actor: Actor): Promise<Result<RulebookView>> {
@@ -18,13 +56,13 @@ export async function rulebookView(ctx: Ctx, actor: Actor): Promise<Result<Ruleb
     number: rules.number,
     rules: RULEBOOK.map((rule) => {
       const { code, subject, statement, condition, severity, gate, source, parameter } = rule;
-      const value = parameter === undefined ? undefined : parameters[parameter];
+      const limit = parameter === undefined ? undefined : limitOf(parameter, parameters[parameter]);
       return {
         ...{ code, subject, statement, condition, severity, gate, source },
+        name: nameOf(code),
+        asked: ASKED[gate],
         inheritable: rule.inheritable !== false,
-        ...(parameter === undefined
-          ? {}
-          : { parameter: { key: parameter, value: value === undefined ? 'default' : String(value) } }),
+        ...(limit ? { parameter: limit } : {}),
       };
     }),
   });

@@ -44,6 +44,13 @@ export function shownFigure(figure: F | undefined, owner?: Origin): Shown | unde
   return { text: `not known: ${figure.unknown}`, unknown: true };
 }
 
+/** A fraction of a document, shown as a percentage. */
+export function shownShare(figure: F | undefined, owner?: Origin): Shown | undefined {
+  const shown = shownFigure(figure, owner);
+  if (!shown || figure === undefined || !isKnown(figure) || figure.unit !== '-') return shown;
+  return { ...shown, text: formatNumber(Math.round(figure.value * 1e6) / 1e4), unit: '%' };
+}
+
 /** An input of a method as the document states it; `label` names the place that it is taken from. */
 export function shownInput(input: Input, label: (path: string) => string): Shown {
   if ('use' in input) return { text: label(input.use) };

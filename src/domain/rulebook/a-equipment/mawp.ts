@@ -22,7 +22,8 @@ export const mawpMissing = rule(
     code: 'mawp-missing',
     subject: 'equipment',
     statement: '{equipment} has no MAWP or design pressure, so nothing can be judged against it.',
-    condition: 'for each equipment side in the system: mawp absent, or its coincident temperature absent',
+    condition:
+      'A side of some equipment in the system has no MAWP or design pressure, or no temperature that goes with it.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-98 [M]; 46 CFR 54.10-5 [S] (MAWP goes with a designated temperature)',
@@ -65,7 +66,7 @@ export const mawpNotGoverning = rule(
     subject: 'group',
     statement: '{device} is judged against {equipment}, but {weaker} governs once static head is counted.',
     condition:
-      "min_i(mawp_i − ρ·g·h_i/1000) < the mawp the group uses; h_i m = height of the device's pressure reference above the lowest liquid-filled point of item i, ρ kg/m³, counted only for scenarios with a liquid-full path; tolerance 0.1 %",
+      'Another part has a lower MAWP, less the static head of liquid above its lowest point, than the one the group is judged against. Head counts only in scenarios with a path full of liquid; 0.1 % is allowed.',
     severity: 'stop',
     gate: 'scenarios',
     source:
@@ -108,7 +109,7 @@ export const mawpTemperatureExceeded = rule(
     subject: 'scenario',
     statement: 'In {scenario}, {equipment} reaches {T}, above the {Td} for which its MAWP is stated.',
     condition:
-      '(a) scenario kind ≠ fire and T_relief > T_coincident + 1 K; (b) the same for fire (wall temperature is not a design condition)',
+      'The relieving temperature is more than 1 K above the temperature for which the MAWP is stated, in a scenario other than fire. In fire it is a note: the wall temperature is not a design condition.',
     severity: 'justify',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-98, UG-20 [M]; re-rating at the higher temperature must be referenced',
@@ -139,7 +140,7 @@ export const mawpRaisedWithoutRerate = rule(
     statement:
       'The MAWP or design temperature of {equipment} is higher than in the basis in force and no re-rating is referenced.',
     condition:
-      'new mawp > old, or new T_design > old, or new mdmt < old, and no references[] item of kind rerate that names the tag',
+      'The MAWP or design temperature is higher, or the minimum metal temperature lower, than in the basis in force, and no re-rating on the list of references names the tag.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 510 §7 re-rating [M]; trade practice',

@@ -99,7 +99,7 @@ export const vacuumUnprotected = rule(
     statement:
       '{scenario} can pull {equipment} to {pv}, and its external rating is {x} with no vacuum relief or make-up gas that answers it.',
     condition:
-      'a vacuum scenario is credible and (externalRating absent, or p_min < −externalRating) and no vacuum device/gas make-up in the answering group; also fires when a vacuum scenario is set aside with the reason “rated for full vacuum” and externalRating < site barometer',
+      'A vacuum scenario is credible, the external rating is missing or too small for it, and no vacuum device or make-up gas answers it. Also when vacuum is set aside as “rated for full vacuum” and the external rating is below the site’s barometer.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 521 7th, API 2000 7th [M]; trade practice',
@@ -133,7 +133,7 @@ export const equipmentUnprotected = rule(
     subject: 'equipment',
     statement: '{equipment} has no device and no statement of why none is needed.',
     condition:
-      'no group covers the item and (noDevice.reason empty, or reason is system-design without: self-limiting source pressure ≤ MAWP at coincident temperature, written analysis, acceptance)',
+      'No group covers the item and no reason is given; or it is protected by system design without a source that cannot exceed the MAWP, a written analysis and an acceptance.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 2019 UG-125(a), UG-140 [S]; UG-125(g) [S]',
@@ -155,7 +155,7 @@ export const boundaryValveUnregistered = rule(
     subject: 'equipment',
     statement: 'A valve that can separate {equipment} from {device} is not in the isolation list.',
     condition:
-      'boundary.valvesInPath (count read from the P&ID) ≠ number of isolations[] on that path, or the count is blank',
+      'The valves in the path counted on the P&ID are not as many as the isolations listed there, or the count is blank.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 2015 UG-135(d) [S]; CSB Williams Geismar 2013',

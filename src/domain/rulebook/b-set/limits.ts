@@ -37,7 +37,7 @@ export const setAboveMawp = rule(
     subject: 'device',
     statement: '{device} is set at {set}, above the MAWP of {equipment} ({mawp}).',
     condition:
-      'first.set > mawp·1.001 (pressure); ASME, EN and B31.3 alike; for storage tanks use tank-vent-set-high',
+      'The set pressure of the first device is above the MAWP by more than 0.1 %, alike under ASME, EN and B31.3. Storage tanks have their own rule.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-134(a) [S]; EN ISO 4126-9 / EN 764-7: set ≤ PS [M]',
@@ -79,7 +79,7 @@ export const setAdditionalAbove105 = rule(
     subject: 'group',
     statement: '{device} is an additional device set at {set}, above 105 % of MAWP.',
     condition:
-      'any further device that answers a non-fire scenario: set > 1.05·mawp; EN: set > 1.05·PS or its pressure at full lift > 1.10·PS',
+      'A further device that answers a scenario other than fire is set above 105 % of MAWP; under EN also when its pressure at full lift is above 110 % of PS.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-134(a) [S]; EN 764-7 [M]',
@@ -116,7 +116,7 @@ export const setFireSupplement = rule(
     statement:
       '{device} is set above 105 % of MAWP, which is allowed only for a supplementary fire device, up to 110 %.',
     condition:
-      'device that answers fire only: set > 1.05·mawp and not marked supplementaryFire, or set > 1.10·mawp, or basis = EN (one that also answers a process scenario falls under set-additional-above-105)',
+      'A device that answers fire only is set above 105 % of MAWP without being marked as supplementary for fire, or above 110 %, or the code basis is EN.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-134(b) [M]; EN: not available [M]',
@@ -150,7 +150,7 @@ export const setsNotStaggered = rule(
     subject: 'group',
     statement: 'The {n} devices of {group} all open together, which favours chatter at small loads.',
     condition:
-      'n ≥ 2 pop-action devices in service, max(set)/min(set) − 1 < 0.01, and the smallest credible load < 0.5 × Σ rated',
+      'Two or more pop-action devices in service are set within 1 % of each other, and the smallest credible load is less than half of what they pass together.',
     severity: 'note',
     gate: 'check',
     source: 'trade practice; [P]',

@@ -58,7 +58,7 @@ export const operatingMarginSmall = rule(
     subject: 'device',
     statement: '{equipment} operates at {pop}, only {m} % below the set pressure of {device}.',
     condition:
-      '(a) set − pop_max < max(margin·set, floor); margin 0.10 / floor 5 psi or 35 kPa spring metal seat; 0.07 soft seat; 0.05 pop pilot; 0.02 modulating pilot; 0.03 supplementary-loaded; (b) set ≤ pop_max: it opens in normal operation',
+      'The gap between set pressure and the highest operating pressure is too small: 10 % of set and at least 5 psi (35 kPa) for a spring valve with metal seat, 7 % with soft seat, 5 % for a pop pilot, 2 % for a modulating pilot, 3 % where supplementary-loaded; or the valve would open in normal operation.',
     severity: 'justify',
     gate: 'scenarios',
     source:
@@ -106,7 +106,7 @@ export const reseatBelowOperating = rule(
     statement:
       '{device} reseats at {reseat}, below the normal operating pressure {pop}: once open it may not close.',
     condition:
-      "set·(1 − blowdown) < pop_normal; blowdown from certificate, else maker's maximum, else 0.07 gas / 0.20 liquid by assumption (then the sentence says so)",
+      'The set pressure less the blowdown is below the normal operating pressure. The blowdown is the certificate’s, else the maker’s maximum, else assumed as 7 % for gas and 20 % for liquid (the sentence then says so).',
     severity: 'justify',
     gate: 'scenarios',
     source: 'API 520-1 [M]; physics [P]',
@@ -137,7 +137,7 @@ export const blowdownOutsideRange = rule(
     subject: 'device',
     statement: 'The blowdown of {device}, {bd} %, is outside the usual range for its service.',
     condition:
-      'compressible: < 2 % or > max(15 %, 30 kPa); liquid: < 2.5 % or > max(20 %, 60 kPa); lower limit not for proportional/modulating valves; also 0 or blank → note text',
+      'Gas or vapour: below 2 %, or above the larger of 15 % and 30 kPa. Liquid: below 2.5 %, or above the larger of 20 % and 60 kPa. The lower limit does not bind proportional and modulating valves; a blowdown of nought or none is a note.',
     severity: 'justify',
     gate: 'scenarios',
     source: 'ISO 4126-1:2013/Amd 1:2016 [S]',

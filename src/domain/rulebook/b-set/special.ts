@@ -13,7 +13,7 @@ export const thermalReliefSetHigh = rule(
     statement:
       '{device} protects only blocked-in piping and is set above the lesser of the test pressure and 120 % of design.',
     condition:
-      'all scenarios of the device = thermal-expansion, equipment kind piping: set > min(p_test, 1.20·p_design)',
+      'All scenarios of the device are thermal expansion in piping, and it is set above the lesser of the test pressure and 120 % of the design pressure.',
     severity: 'stop',
     gate: 'scenarios',
     source: "ASME B31.3-2016 322.6.3(b)(2) [S]; needs owner's approval for set above VIII-1 limits",
@@ -42,7 +42,7 @@ export const tankVentSetHigh = rule(
     subject: 'device',
     statement: '{device} needs {pf} to pass its flow, beyond the design pressure or vacuum of {tank}.',
     condition:
-      'pressure: p_at_required_flow > p_design (emergency: > 1.00·p_design API 650, > 1.20·p_design API 620 fire, > 1.10 non-fire); vacuum: abs(p_at_required_flow) > designVacuum; also emergency vent opening ≤ normal vent opening',
+      'The pressure at the required flow is above the tank’s design pressure (for an emergency vent 100 % to API 650; to API 620 120 % in fire and 110 % otherwise), or the vacuum is beyond the design vacuum, or the emergency vent opens no later than the normal one.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 2000 5th (49 CFR 195.264 reprint) [S]; API 650/620 allowances [M]',
@@ -81,7 +81,7 @@ export const setOutsideSpringRange = rule(
     subject: 'device',
     statement: '{set} lies outside the range of the fitted spring ({lo}–{hi}).',
     condition:
-      'CDTP (else set) outside nameplate spring range; if the range is unknown and a reset is proposed: change from stamped set > ±10 % (> ±5 % above 250 psi/1 720 kPa)',
+      'The CDTP, or else the set pressure, is outside the range of the spring on the plate. Where the range is unknown: a reset changes the stamped set pressure by more than 10 %, or by more than 5 % above 250 psi (1 720 kPa).',
     severity: 'stop',
     gate: 'scenarios',
     source:

@@ -44,7 +44,7 @@ export const conventionalBuiltUpHigh = rule(
     subject: 'device',
     statement: 'Built-up back pressure on {device} is {x} % of set, more than its overpressure of {op} %.',
     condition:
-      'spring, conventional: bu/set > op (0.10 / 0.16 / 0.21, or larger where set < MAWP); EN: > 0.10 unless the maker states more',
+      'For a conventional spring valve: built-up back pressure on set pressure is larger than the overpressure (10, 16 or 21 %, or more where it is set below the MAWP). Under EN above 10 %, unless the maker states more.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 520-1 10th §5.3 [M]; 10 % public guides [S]',
@@ -84,7 +84,7 @@ export const superimposedVariable = rule(
     subject: 'device',
     statement: 'Variable back pressure delays the opening of {device} to {po}, above its limit.',
     condition:
-      'spring, conventional: set + (sv_max − sv_min) > setLimit·1.001 (setLimit = MAWP, 1.05 or 1.10 by its place in the group)',
+      'For a conventional spring valve: the set pressure with the whole swing of the superimposed back pressure is above the highest set pressure that its place in the group allows (MAWP, 105 or 110 %), by more than 0.1 %.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 520-1 [M]; trade practice',
@@ -109,7 +109,7 @@ export const balancedTotalHigh = rule(
     subject: 'device',
     statement: 'Total back pressure on balanced {device} is {x} % of set, beyond {lim} %.',
     condition:
-      "balanced: bt/set > min(maker's limit, site limit); maker's limit needs a reference when it is the larger",
+      'For a balanced valve: total back pressure on set pressure is above the lesser of the maker’s limit and the site’s. The maker’s limit needs a reference where it is the larger.',
     severity: 'justify',
     gate: 'scenarios',
     source:

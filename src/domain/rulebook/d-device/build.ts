@@ -13,7 +13,7 @@ export const reducedLiftMisused = rule(
     subject: 'device',
     statement: 'The capacity of {device} is taken at full lift although its lift is {lift}.',
     condition:
-      'low-lift or restricted and sheet uses full-lift area/capacity; or restricted lift < 30 % of full or < 2 mm (0.080 in); or restricted by other than maker/authorised shop with nameplate',
+      'The lift is low or restricted and the sheet uses the area or capacity of full lift; or the restricted lift is below 30 % of full or below 2 mm (0.080 in); or it was restricted by others than the maker or an authorised shop with a plate.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-133(h) [S], UG-136(a)(11) [S]',
@@ -40,7 +40,7 @@ export const pilotUnfit = rule(
     subject: 'device',
     statement: '{device} is pilot-operated in {service}, which can block or damage the pilot.',
     condition:
-      "pilot and (service flagged solids, wax, polymer, hydrate, freezing, or temperature outside soft-goods limits default −29…204 °C) and none of: filter, heat tracing, purge, remote clean sense, maker's statement",
+      'A pilot stands in service with solids, wax, polymer, hydrate or freezing, or outside the temperatures of its soft goods (−29 to 204 °C unless stated), and has no filter, heat tracing, purge, remote clean sensing or maker’s statement.',
     severity: 'justify',
     gate: 'scenarios',
     source: 'API 520-1 [M]',
@@ -74,7 +74,7 @@ export const certificationMissing = rule(
     subject: 'device',
     statement: '{device} has no certified capacity for the code basis of this site.',
     condition:
-      '(a) new or changed device: mark/certificate absent (ASME UV/UD or successor under XIII; CE/UKCA category IV); (b) existing unchanged device',
+      'The mark or certificate is missing (ASME UV or UD, or its successor under XIII; CE or UKCA category IV). A new or changed device is stopped; one that stands unchanged asks for a reason.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-129/131, XIII (2021+) [M]; PED 2.11 [M]',

@@ -25,7 +25,7 @@ export const trimDoesNotSuitState = rule(
     subject: 'device',
     statement: '{device} is certified for {cert} but {scenario} relieves {state}.',
     condition:
-      '(a) liquid or liquid-first scenario and certified state lacks liquid and the sheet is not the non-certified liquid method (25 % overpressure, Kp); (b) gas/steam scenario and certified state lacks gas/steam; (c) device called safety valve (pop, compressible) on liquid; (d) two-phase or liquid→vapour and certified state not both: state why it is stable',
+      'The scenario passes liquid, or liquid first, through a device not certified for liquid, and the sheet is not the one for valves without liquid certificate; or gas or steam through one not certified for it; or liquid through a pop valve; or two phases or flashing liquid through one not certified for both, without a word on why it is stable.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'ASME VIII-1 UG-125(f): liquid-full vessels need devices for liquid [S]; API 520-1 [M]',
@@ -62,7 +62,7 @@ export const openBonnetUnfit = rule(
     subject: 'device',
     statement: '{device} has an open bonnet or plain lever and can release {fluid} at the valve.',
     condition:
-      'open bonnet/yoke or unpacked lever and (toxic or flammable fluid, or outlet to a closed system with superimposed pressure > 0)',
+      'Open bonnet or yoke, or an unpacked lever, with a toxic or flammable fluid, or with an outlet to a closed system under superimposed pressure.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 520-1 [M]',
@@ -105,7 +105,7 @@ export const actuatedDeviceAlone = rule(
     subject: 'device',
     statement: '{device} needs outside power or acts on temperature, and {scenario} has no other device.',
     condition:
-      'actuation power or temperature and it alone answers a credible scenario; exceptions by basis: certified controlled safety system (ISO 4126-5), ASME I steam generator, listed T&P valve on hot-water storage',
+      'A device that works by outside power or by temperature alone answers a credible scenario. Excepted by code basis: certified controlled safety systems, steam generators to ASME I, listed temperature-and-pressure valves on hot-water storage.',
     severity: 'stop',
     gate: 'scenarios',
     source:
@@ -131,7 +131,7 @@ export const nonReclosingAlone = rule(
     code: 'non-reclosing-alone',
     subject: 'device',
     statement: '{device} does not reclose: after it acts, {inventory} of {fluid} is lost.',
-    condition: 'rupture disk or pin alone and fluid toxic, flammable or liquefied',
+    condition: 'A rupture disk or pin acts alone and the fluid is toxic, flammable or liquefied.',
     severity: 'justify',
     gate: 'scenarios',
     source: 'SPS 341 App. C note on non-reclosing devices [S]; [P]',

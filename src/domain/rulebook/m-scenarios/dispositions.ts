@@ -18,7 +18,7 @@ export const scenarioUndecided = rule(
     subject: 'scenario',
     statement: '{scenario} has no decision.',
     condition:
-      "any scenario key of the site's list without disposition, or key added to the list after the revision",
+      'A scenario of the site’s list has no disposition, or was added to the list after the revision.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'trade practice; ASME VIII-1 UG-125(a)(1) [S]',
@@ -44,7 +44,7 @@ export const scenarioStatusMissing = rule(
     subject: 'scenario',
     statement: '{scenario} is decided for normal operation only.',
     condition:
-      'for each of normal, start-up, shutdown, standby, isolated, cleaning/regeneration: applies or does not apply blank',
+      'For one of normal, start-up, shutdown, standby, isolated, cleaning or regeneration, it is left blank whether the scenario applies.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'CSB Williams Geismar recommendation to API 521 [P]',
@@ -102,7 +102,7 @@ export const scenarioReasonThin = rule(
     subject: 'scenario',
     statement: 'The reason given for setting {scenario} aside says too little.',
     condition:
-      'set aside and (text < 40 characters, or equals a starting sentence with an unfilled {placeholder}, or names no figure, tag or reference, or disposition below-limit without a live figure and its tag)',
+      'The scenario is set aside, and the reason is shorter than 40 characters, or is a starting sentence with a blank left in it, or names no figure, tag or reference, or stays below the limit without a live figure and its tag.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'trade practice; [P]',
@@ -126,7 +126,7 @@ export const doubleJeopardyUnsupported = rule(
     statement:
       '{scenario} is set aside as two independent failures, but one may be hidden or share a scenario.',
     condition:
-      'reason kind = double jeopardy and any blank: failure 1, failure 2, common utility/person/instrument = none, hidden failure = no (check valves, series regulators, standby pumps count as hidden)',
+      'The reason is two independent failures, and one of these is left open: the first, the second, that they share no utility, person or instrument, that neither is hidden. Check valves, regulators in series and standby pumps count as hidden.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 521 6th 4.2.3 as quoted: latent failures are existing conditions [S]',
@@ -151,7 +151,7 @@ export const commonCauseUnlinked = rule(
     subject: 'scenario',
     statement: "{utility} failure is credible here but is not tied to the site's utility {u}.",
     condition:
-      "utility scenario credible and no utility id, or utility's list of users lacks this system; fire likewise by zone",
+      'The loss of a utility is credible and no utility is named, or the utility does not list this system among its users; likewise fire by its zone.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 521 common causes; trade practice [P]',

@@ -46,7 +46,7 @@ export const checkValveCredited = rule(
     subject: 'scenario',
     statement: '{scenario} is set aside, or its load cut, because of a check valve.',
     condition:
-      'one check valve: load must use forward Cv or no resistance; two dissimilar in series, inspected: leakage as an orifice ≥ 10 % of the nominal diameter of the largest; anything less, or no inspection record',
+      'One check valve: the load must count its forward coefficient or no resistance at all. Two unlike ones in series, inspected: a leak like an orifice of at least 10 % of the larger nominal diameter. Anything less, or no record of inspection, is not enough.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'API 521 5th 4.3.4.2 as quoted [S]; 10 % diameter (reference topic) [S]',
@@ -67,7 +67,7 @@ export const activeSafeguardCredited = rule(
     subject: 'scenario',
     statement: '{scenario} depends on a trip, an alarm or a person who must act within {t} min.',
     condition:
-      'credited: instrumented function without target and test reference, or site forbids; operator action with available time < 20 min, or without independent alarm',
+      'Credit for an instrumented function without target and test reference, or where the site forbids it; or for a person with less than 20 minutes to act, or without an alarm of its own.',
     severity: 'justify',
     gate: 'scenarios',
     source: 'API 521 §5.4 5th: 10–30 min as quoted [S]; trips not credited for device sizing',
@@ -128,7 +128,7 @@ export const reasonWithoutFieldCheck = rule(
     statement:
       '{scenario} depends on {condition}, which is not on the list of conditions to be seen in the field.',
     condition:
-      'reason cites lock, blind, travel stop, restriction orifice, removed spool, impeller size, governor, fail position and no conditions[] entry with that tag',
+      'The reason rests on a lock, spade, travel stop, restriction orifice, removed spool, impeller size, governor or fail position, and no field condition has that tag.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'trade practice, §5; [P]',
@@ -149,7 +149,7 @@ export const tubeRuptureScreen = rule(
     statement:
       "The low side of {exchanger} was tested at {pt}, below the high side's {ph}: a broken tube cannot be set aside.",
     condition:
-      'p_test·stressRatio < p_high_max for exchanger side **and** connected piping, and scenario not credible; double-pipe of pipe and others by written assessment',
+      'The corrected test pressure of the low side, exchanger or connected piping, is below the highest pressure of the high side, and the scenario is not credible. Double-pipe exchangers and others go by a written assessment.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'corrected test pressure, API 521 5th 3.21/5.19 as quoted [S]; 10/13 where test = 1.3',

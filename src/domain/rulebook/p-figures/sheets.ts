@@ -1,6 +1,7 @@
 /* Rules on calculations and on figures that were taken from elsewhere: unsound, from memory, stale. */
 import { type FigureRef, getAt, isFigure, quantityOf, type Scenario } from '@domain/basis';
 import { externalInputsHash, type Sheet } from '@domain/evaluate';
+import { methodById } from '@engine/catalog';
 import { type Q, toSI } from '@engine/quantity';
 import { gaugePa, gt, onScenario } from '../reading';
 import { type Hit, rule, type RuleContext } from '../types';
@@ -23,7 +24,7 @@ export const calculationUnsound = rule(
     subject: 'any',
     statement: '{sheet} did not converge or left the range of {method} ({range}).',
     condition:
-      '(a) correlation outside its range: nearest limit shown; (b) iteration failed or ended on a bracket',
+      'A correlation is used outside its range (the nearest limit is shown), or an iteration failed or stopped short.',
     severity: 'justify',
     gate: 'check',
     source: '[P]',
@@ -51,7 +52,8 @@ export const methodFromMemory = rule(
     code: 'method-from-memory',
     subject: 'any',
     statement: '{constant} in {sheet} was set down from memory and not checked against {standard}.',
-    condition: 'any step whose clause is tagged memory in the method dossier and not confirmed by this site',
+    condition:
+      'A step of the sheet rests on a clause set down from memory, and this site has not confirmed it.',
     severity: 'note',
     gate: 'approval',
     source: 'reference “from memory” [P]',
@@ -73,10 +75,10 @@ export const methodFromMemory = rule(
       const standard = steps.find((step) => step.clause !== undefined)?.clause ?? 'the standard';
       const values = {
         constant: constant.charAt(0).toUpperCase() + constant.slice(1),
-        sheet: method,
+        sheet: methodById(method)?.title ?? method,
         standard,
       };
-      return { subject: `methods/${method}`, tag: method, values };
+      return { subject: `methods/${method}`, tag: values.sheet, values };
     });
   },
 );
@@ -103,7 +105,8 @@ export const copiedFigureStale = rule(
     code: 'copied-figure-stale',
     subject: 'any',
     statement: '{figure} was taken from {document} and has moved there from {old} to {new}.',
-    condition: 'origin of kind figure, present value differs from the value taken by more than 0.1 %',
+    condition:
+      'The figure was taken from another document, and differs there from the value taken by more than 0.1 %.',
     severity: 'stop',
     gate: 'scenarios',
     source: '[P]',
@@ -145,7 +148,7 @@ export const belowLimitBoundStale = rule(
     code: 'below-limit-bound-stale',
     subject: 'scenario',
     statement: '{scenario} stays below the limit only while {figure} is {old}; it is now {new}.',
-    condition: 'the live bound of a below-limit disposition moved, or passes the limit',
+    condition: 'The live figure on which the disposition rests has moved, or has passed the limit.',
     severity: 'stop',
     gate: 'scenarios',
     source: '[P]',
@@ -182,7 +185,7 @@ export const externalSheetStale = rule(
     code: 'external-sheet-stale',
     subject: 'scenario',
     statement: 'The external sheet {sheet} was made for other inputs than stand here now.',
-    condition: 'hash of its inputs differs from the one it was made of',
+    condition: 'Its inputs here are no longer those that it was made of.',
     severity: 'stop',
     gate: 'scenarios',
     source: '[P]',

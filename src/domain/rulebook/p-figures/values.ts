@@ -96,7 +96,8 @@ export const valueImpossible = rule(
     code: 'value-impossible',
     subject: 'any',
     statement: '{quantity} = {v} cannot be.',
-    condition: 'outside the possible range, NaN, infinite, negative where not allowed, blank where required',
+    condition:
+      'The figure is outside the possible range, is no number, is negative where it cannot be, or is blank where it is needed.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'the ranges of inputs [P]',
@@ -118,7 +119,8 @@ export const valueImplausible = rule(
     code: 'value-implausible',
     subject: 'any',
     statement: '{quantity} = {v} is unusual: confirm or correct.',
-    condition: 'outside the plausible range and inside the possible one; answered by “confirmed” + origin',
+    condition:
+      'The figure is outside the plausible range and inside the possible one. Confirm it, with its origin.',
     severity: 'justify',
     gate: 'scenarios',
     source: 'the ranges of inputs [P]',
@@ -177,7 +179,7 @@ export const unitSlipSuspected = rule(
     subject: 'any',
     statement: '{quantity} changed by a factor {f}, close to a unit mix-up ({a} ↔ {b}).',
     condition:
-      'ratio new/old, document/plate or blind/original within 0.7 % of 6.895, 14.504, 0.06895, 98.07, 1.0197, 1.8, 25.4, 645.2, 2.2046, 3.785, 4.403, 0.865, 3.6, 16.02, 1 000, 10; or difference = barometer ±1 %, 273.15, 459.67; or digits swapped',
+      'A figure differs from its old value, its document or plate, or from the unseen check by a factor within 0.7 % of a common conversion (psi to kPa or bar, inch to mm, pound to kg, gallon to litre, …), or by the barometer or the zero of a temperature scale, or by two digits in each other’s place.',
     severity: 'justify',
     gate: 'check',
     source: '[P]; published-examples TANK-06 (swapped digits)',
@@ -207,7 +209,7 @@ export const originMissing = rule(
     subject: 'any',
     statement: '{quantity} was changed and does not say where it comes from.',
     condition:
-      'changed figure without origin kind (drawing, data sheet, simulation with file and method, plate, judgement) and reference',
+      'A changed figure has no kind of origin (drawing, data sheet, simulation with file and method, plate, judgement) or no reference.',
     severity: 'stop',
     gate: 'scenarios',
     source: 'trade practice [P]',

@@ -148,7 +148,7 @@ export function basisView(
     id,
     name,
     ...(note === undefined || note === '' ? {} : { note }),
-    facts: factsOf(doc, `${list}/${id}`, skip),
+    facts: factsOf(doc, `${list}/${id}`, skip, people),
   });
   return {
     boundary: doc.boundary.text,

@@ -9,7 +9,7 @@ import {
   joinPath,
   type Origin,
 } from '@domain/basis';
-import { type Shown, shownFigure } from '../shown';
+import { type Shown, shownFigure, shownShare } from '../shown';
 
 export type Fact = { label: string; shown: Shown };
 /** An element with its facts: a source, a fluid, a relief point. */
@@ -27,6 +27,9 @@ const SILENT = new Set([
   'person',
   'hidden',
 ]);
+
+/** Kept as fractions, read as percentages. */
+const SHARES = new Set(['overpressure', 'blowdown']);
 
 /** What the elements of a basis are called, by their ids. */
 export function namesById(doc: Basis): ReadonlyMap<string, string> {
@@ -46,19 +49,26 @@ type Walk = {
   cut: number;
 };
 
-function word(value: string, names: ReadonlyMap<string, string>): string {
-  return names.get(value) ?? value.replaceAll('-', ' ');
+/** A word of the schema, or what a path or an id stands for. */
+function word(value: string, { doc, names }: Walk): string {
+  if (value.includes('/') && getAt(doc, value) !== undefined) return describePath(doc, value).label;
+  return names.get(value) ?? value.replaceAll('-', ' ').replaceAll('_', ' ');
 }
 
 function labelOf(walk: Walk, path: string): string {
-  const label = describePath(walk.doc, path).label.slice(walk.cut);
+  const label = describePath(walk.doc, path)
+    .label.slice(walk.cut)
+    .replace(/_use$/, ', taken from')
+    .replace(/_list$/, '')
+    .replaceAll('_', ' ');
   return label.charAt(0).toUpperCase() + label.slice(1);
 }
 
 function leaf(walk: Walk, path: string, value: unknown): Fact[] {
   const label = labelOf(walk, path);
   if (isFigure(value)) {
-    const shown = shownFigure(value, walk.owner);
+    const last = path.slice(path.lastIndexOf('/') + 1);
+    const shown = SHARES.has(last) ? shownShare(value, walk.owner) : shownFigure(value, walk.owner);
     return shown ? [{ label, shown }] : [];
   }
   if (typeof value === 'boolean') return [{ label, shown: { text: value ? 'yes' : 'no' } }];
@@ -68,7 +78,7 @@ function leaf(walk: Walk, path: string, value: unknown): Fact[] {
     const isName = ['letter', 'maker', 'model', 'nominal', 'drawing', 'certificate', 'location'].includes(
       last,
     );
-    return [{ label, shown: { text: isName ? value : word(value, walk.names) } }];
+    return [{ label, shown: { text: isName ? value : word(value, walk) } }];
   }
   return [];
 }
@@ -77,7 +87,7 @@ function inside(walk: Walk, path: string, value: unknown): Fact[] {
   if (value === undefined || value === null || isRich(value)) return [];
   if (Array.isArray(value)) {
     if (value.every((one) => typeof one === 'string')) {
-      const text = value.map((one) => word(one, walk.names)).join(', ');
+      const text = value.map((one) => word(one, walk)).join(', ');
       return text === '' ? [] : [{ label: labelOf(walk, path), shown: { text } }];
     }
     return value.flatMap((one: unknown) =>
@@ -92,12 +102,23 @@ function inside(walk: Walk, path: string, value: unknown): Fact[] {
 
 /**
  * The facts of the element at a path; `skip` names fields that stand elsewhere on the page. Figures without an origin of
- * their own have the element's.
+ * their own have the element's; `people` names persons by their ids.
  */
-export function factsOf(doc: Basis, path: string, skip: readonly string[] = []): Fact[] {
+export function factsOf(
+  doc: Basis,
+  path: string,
+  skip: readonly string[] = [],
+  people: ReadonlyMap<string, string> = new Map(),
+): Fact[] {
   const element = getAt(doc, path);
   const owner = isFields(element) ? (element['origin'] as Origin | undefined) : undefined;
   const cut = describePath(doc, path).label.length + 2;
-  const walk: Walk = { doc, skip: new Set(skip), names: namesById(doc), cut, ...(owner ? { owner } : {}) };
+  const walk: Walk = {
+    doc,
+    skip: new Set(skip),
+    names: new Map([...namesById(doc), ...people]),
+    cut,
+    ...(owner ? { owner } : {}),
+  };
   return inside(walk, path, element);
 }

@@ -3,7 +3,7 @@ import { type Basis, quantityOf, type ReliefPoint } from '@domain/basis';
 import { kindOf, pointFacts, type RungKind } from '@domain/projections';
 import { type Evaluation, type Verdict } from '@domain/evaluate';
 import { convert, type Q, QuantityError, toSI, unitLabel } from '@engine/quantity';
-import { inline, percent, type Shown, shownFigure, shownQ } from '../shown';
+import { inline, percent, type Shown, shownFigure, shownQ, shownShare } from '../shown';
 import { type FactGroup, factsOf } from './facts';
 import { type OpenedSystem, type Seen } from './open';
 import { sheetHref } from './scenario-lines';
@@ -134,8 +134,8 @@ const PROPERTIES: readonly Property[] = [
   { label: 'Set vacuum', of: (one) => shownFigure(one.setVacuum), set: true },
   { label: 'Burst pressure', of: (one) => shownFigure(one.disk?.burst), set: true },
   { label: 'Cold differential test pressure', of: (one) => shownFigure(one.cdtp) },
-  { label: 'Overpressure', of: (one) => shownFigure(one.overpressure) },
-  { label: 'Blowdown', of: (one) => shownFigure(one.blowdown) },
+  { label: 'Overpressure', of: (one) => shownShare(one.overpressure) },
+  { label: 'Blowdown', of: (one) => shownShare(one.blowdown) },
   {
     label: 'Bonnet',
     of: (one) => word(one.bonnet && [one.bonnet.kind, one.bonnet.ventTo].filter(Boolean).join(', ')),
@@ -175,7 +175,9 @@ export function pointsOf(of: OpenedSystem, seen: Seen): PointsView {
   return {
     points: body.reliefPoints.map((point) => pointView(of, seen, point)),
     rows: [kind, service, ...PROPERTIES.flatMap((one) => rowOf(one, body.reliefPoints)), discharge],
-    interlocks: body.interlocks.map((one) => `${one.tag}: ${one.text}`),
+    interlocks: body.interlocks.map((one) =>
+      one.text.startsWith(one.tag) ? one.text : `${one.tag}: ${one.text}`,
+    ),
   };
 }
 
