@@ -36,7 +36,9 @@ export const PAGES: readonly string[] = [
     (part) => system + part,
   ),
   `${system}/sheets/${SHEET}`,
-  `${SITE}/systems/SYS-101/revisions/difference`,
+  `${SITE}/systems/SYS-101/revisions/difference?from=4&to=5`,
+  `${SITE}/people`,
+  `${SITE}/people/per_p04`,
   '/mail',
 ];
 /** Pages of the site coordinator. */
