@@ -1,7 +1,7 @@
 /* Live figures in the texts of a case: numbers that the writer affirmed become nodes that follow the sheets. */
 import { type Rich } from '@domain/basis';
 import { type Evaluation } from '@domain/evaluate';
-import { type Q } from '@engine/quantity';
+import { type Q, unitLabel } from '@engine/quantity';
 import { answerId, documentId, scenarioKey } from '../convert';
 import { type DemoLive } from './demo-case-types';
 
@@ -13,14 +13,6 @@ const OUTPUTS: Record<string, (sheet: string) => string> = {
   required_area: (sheet) => `sheets/size:${sheet}#A_required`,
   'detail.air_equivalent': (sheet) => `sheets/load:${sheet}#air_equivalent`,
 };
-const UNITS: Record<string, string> = {
-  mm2: 'mm2',
-  in2: 'in2',
-  'kg/h': 'kg/h',
-  'lb/h': 'lb/h',
-  'Nm3/h': 'Nm3/h',
-};
-
 type Found = { at: number; text: string; node: unknown; unit: string };
 
 function isQ(value: Q | string | undefined): value is Q {
@@ -61,8 +53,8 @@ function findAll(text: string, lives: readonly DemoLive[], sides: ReadonlyMap<st
 /** The unit after a number is shown by the node itself. */
 function restAfter(text: string, found: Found): string {
   const rest = text.slice(found.at + found.text.length);
-  const unit = UNITS[found.unit];
-  return unit !== undefined && rest.startsWith(` ${unit}`) ? rest.slice(unit.length + 1) : rest;
+  const said = [found.unit, unitLabel(found.unit)].find((unit) => rest.startsWith(` ${unit}`));
+  return said === undefined ? rest : rest.slice(said.length + 1);
 }
 
 /** A text of one paragraph in which the figures that the case lists are live. */

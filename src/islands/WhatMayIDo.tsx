@@ -77,7 +77,7 @@ export function WhatMayIDo({ acts, machine, base, links, pointsBeside = false }:
       )}
       {never.length + notNow.length > 0 && (
         <details>
-          <summary>What you may not do here, and why</summary>
+          <summary className="more">What you may not do here, and why</summary>
           <ActList acts={[...never, ...notNow]} base={base} />
         </details>
       )}

@@ -58,6 +58,9 @@ export function stagesAfter(
   return [...new Set(after.map(({ snapshot: next }) => STAGE_WORDS[stageOf(next)]))];
 }
 
+/** Stages that a case is in rather than goes to. */
+const ENDS: ReadonlySet<string> = new Set(['on hold', 'withdrawn', 'refused', 'removed'] as const);
+
 /** Where an act leads, as a sentence. */
 export function leadsTo(act: string, machine: MachineProps, snapshot: CaseSnapshot): string | undefined {
   const stages = stagesAfter(act, machine, snapshot);
@@ -66,5 +69,7 @@ export function leadsTo(act: string, machine: MachineProps, snapshot: CaseSnapsh
   const places = stages.filter((stage) => stage !== now);
   if (places.length === 0) return `The case stays in ${now}.`;
   const ifLast = act === 'SIGN' ? ', once every approver has signed' : '';
+  const [only] = places;
+  if (places.length === 1 && only !== undefined && ENDS.has(only)) return `The case is then ${only}.`;
   return `The case then goes ${places.map((stage) => (stage === 'in force' ? 'into force' : `to ${stage}`)).join(' or ')}${ifLast}.`;
 }

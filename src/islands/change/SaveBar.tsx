@@ -77,7 +77,7 @@ export function SaveBar({ change, early, onEarly }: Props) {
           </a>
         )}
       </div>
-      <p className={stopped ? 'err' : 'note'} role="status">
+      <p className={stopped && told ? 'err' : 'note'} role="status">
         {told}
       </p>
     </>

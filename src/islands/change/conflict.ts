@@ -21,7 +21,9 @@ export function clashesOf(ops: readonly Op[], theirs: Basis): Clash[] {
     const there = getAt(theirs, path);
     if (same(there, was) || same(there, value)) return [];
     const { label } = describePath(theirs, path);
-    return [{ path, label, was: shown(was), ours: shown(value), theirs: shown(there) }];
+    return [
+      { path, label: label.replaceAll('_', ' '), was: shown(was), ours: shown(value), theirs: shown(there) },
+    ];
   });
 }
 

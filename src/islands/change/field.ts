@@ -78,9 +78,11 @@ export function fieldOf(doc: Basis, path: string): Field | undefined {
   const dimensions = dimensionsOf(doc, path, unit);
   if (unit === undefined || dimensions.length === 0) return undefined;
   const missing = figure && !isKnown(figure) ? `not known: ${figure.unknown}` : 'not stated';
+  const { label, where } = describePath(doc, path);
   return {
     path,
-    ...describePath(doc, path),
+    label: label.replaceAll('_', ' '),
+    where,
     present: known ? formatQuantity(known) : missing,
     unit,
     dimensions,
