@@ -21,7 +21,7 @@ export async function send(within: Within, button: string | RegExp): Promise<voi
     .getByRole('button', { name: button, ...(typeof button === 'string' ? { exact: true } : {}) })
     .click();
   const refusal = page.locator('html[data-before] .summary[role=alert]');
-  await expect(page.locator('html:not([data-before])').or(refusal).first()).toBeVisible();
+  await expect(page.locator('html:not([data-before])').or(refusal).first()).toBeVisible({ timeout: 20_000 });
   const told = (await refusal.count()) > 0 ? await refusal.innerText() : '';
   expect(told, `"${String(button)}" was refused`).toBe('');
   await page.waitForLoadState('load');
