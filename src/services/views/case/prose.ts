@@ -2,6 +2,7 @@
 import { type Rich } from '@domain/text';
 import { figureMoved, figuresIn, richFromText } from '@domain/text';
 import { maskProse, maskRich } from '@domain/hidden';
+import { sheetLabel } from '@domain/projections';
 import { formatQuantity } from '@engine/quantity';
 import { type CaseDocumentFile } from '../../case-file';
 import { presentFigure } from '../../stale';
@@ -30,6 +31,11 @@ export function sheetHref(of: OpenedCase, one: CaseDocumentFile, key: string): s
   return `${baseOf(of)}/sheets/${encodeURIComponent(key)}${query}`;
 }
 
+function sheetTitled(one: CaseDocumentFile, key: string): string {
+  const stands = one.after ?? one.before;
+  return stands ? sheetLabel(stands.body, key) : key;
+}
+
 /** A text of a case or of one of its systems. */
 export function proseOf(of: OpenedCase, rich: Rich | undefined, one?: CaseDocumentFile): Prose {
   const text = rich ?? richFromText('');
@@ -47,7 +53,9 @@ export function proseOf(of: OpenedCase, rich: Rich | undefined, one?: CaseDocume
       side: node.attrs.side,
       doc,
       text: formatQuantity(affirmed, decimals === undefined ? {} : { decimals }),
-      ...(key !== undefined && own ? { sheet: `sheet ${key}`, href: sheetHref(of, own, key) } : {}),
+      ...(key !== undefined && own
+        ? { sheet: `sheet “${sheetTitled(own, key)}”`, href: sheetHref(of, own, key) }
+        : {}),
       ...(moved ? { now } : {}),
     };
   });
