@@ -1,5 +1,6 @@
 /* The relief basis read as a document: what is protected, where loads come from, what it rests on. */
 import { type Basis, describePath, quantityOf, type Rich } from '@domain/basis';
+import { methodById } from '@engine/catalog';
 import { formatQuantity } from '@engine/quantity';
 import { scenarioLabel } from '@domain/projections';
 import { ruleOf } from '@domain/rulebook';
@@ -92,7 +93,7 @@ const HOLDS: Record<string, string> = {
   pressureless: 'holds no pressure',
 };
 
-function conditionsOf(doc: Basis): ConditionRow[] {
+function conditionsOf(doc: Basis, people: ReadonlyMap<string, string>): ConditionRow[] {
   return doc.fieldConditions.map((one) => {
     const figure = quantityOf(one.requires.figure);
     const supports = doc.scenarios.filter((scenario) =>
@@ -101,10 +102,12 @@ function conditionsOf(doc: Basis): ConditionRow[] {
     return {
       id: one.id,
       tag: one.tag,
-      kind: spaced(one.kind),
+      kind: one.kind === 'blind' ? 'spade' : spaced(one.kind),
       requires: [one.requires.words, figure && formatQuantity(figure)].filter(Boolean).join(', '),
       where: one.where ?? '',
-      lock: one.lock ? `${one.lock.number}, key kept by ${one.lock.keeper}` : '',
+      lock: one.lock
+        ? `${one.lock.number}, key kept by ${people.get(one.lock.keeper) ?? one.lock.keeper}`
+        : '',
       round: one.roundMonths === undefined ? '' : `every ${String(one.roundMonths)} months`,
       supports: supports.map((scenario) => scenarioLabel(doc, scenario)).join('; '),
     };
@@ -164,7 +167,7 @@ export function basisView(
       group('isolations', one.id, one.tag ?? `${one.where} ${spaced(one.kind)} valve`, one.note, []),
     ),
     interlocks: doc.interlocks.map((one) => ({ id: one.id, tag: one.tag, text: one.text })),
-    conditions: conditionsOf(doc),
+    conditions: conditionsOf(doc, people),
     ...textsOf(doc, people),
     references: doc.references.map((one) => ({
       id: one.id,
@@ -177,7 +180,7 @@ export function basisView(
         'externalSheets',
         one.id,
         one.title,
-        `${one.author}${one.on ? `, ${one.on}` : ''}: ${one.method}`,
+        `${one.author}${one.on ? `, ${one.on}` : ''}: ${methodById(one.method)?.title ?? one.method}`,
         ['title', 'author', 'method', 'madeOf', 'on'],
       ),
     ),

@@ -58,8 +58,8 @@ function word(value: string, { doc, names }: Walk): string {
 function labelOf(walk: Walk, path: string): string {
   const label = describePath(walk.doc, path)
     .label.slice(walk.cut)
-    .replace(/_use$/, ', taken from')
-    .replace(/_list$/, '')
+    .replace(/, use$/, ', taken from')
+    .replace(/, list$/, '')
     .replaceAll('_', ' ');
   return label.charAt(0).toUpperCase() + label.slice(1);
 }

@@ -55,8 +55,11 @@ function partOf<V>(make: Make<V>) {
   };
 }
 
-async function writersOf(of: OpenedSystem, seen: Seen): Promise<Map<string, string>> {
-  const people = await findPeople(of.ctx.db, [...new Set(seen.body.justifications.map((one) => one.by))]);
+/** The names of those whom the basis names by id: writers of justifications, keepers of keys. */
+async function namedOf(of: OpenedSystem, { body }: Seen): Promise<Map<string, string>> {
+  const locked = [...body.isolations, ...body.fieldConditions].flatMap((one) => one.lock?.keeper ?? []);
+  const ids = new Set([...body.justifications.map((one) => one.by), ...locked]);
+  const people = await findPeople(of.ctx.db, [...ids]);
   return new Map(people.map((person) => [person.id, person.name]));
 }
 
@@ -69,12 +72,12 @@ export type OverviewView = {
 };
 
 /** Overview: what governs, the orifice bars, the pressure ladders, what the basis rests on. */
-export const systemOverview = partOf<OverviewView>((of, seen) => {
+export const systemOverview = partOf<OverviewView>(async (of, seen) => {
   const count = (severity: string) => seen.outcomes.filter((one) => one.severity === severity).length;
   return {
     groups: groupViews(of, seen),
     points: pointsOf(of, seen),
-    conditions: basisView(of, seen, new Map()).conditions,
+    conditions: basisView(of, seen, await namedOf(of, seen)).conditions,
     outcomes: { stops: count('stop'), justifies: count('justify'), notes: count('note') },
     hidden: of.hidden,
   };
@@ -82,7 +85,7 @@ export const systemOverview = partOf<OverviewView>((of, seen) => {
 
 /** The relief basis as a document. */
 export const systemBasis = partOf<BasisView>(async (of, seen) =>
-  basisView(of, seen, await writersOf(of, seen)),
+  basisView(of, seen, await namedOf(of, seen)),
 );
 
 /** Relief points with their ladders and every figure. */
@@ -105,7 +108,7 @@ export const systemLines = partOf<LinesView>(linesOf);
 /** Outcomes of the rulebook. */
 export const systemOutcomes = partOf<{ outcomes: OutcomeView[]; hidden: boolean }>(async (of, seen) => ({
   hidden: of.hidden,
-  outcomes: outcomesOf(of, seen, await writersOf(of, seen)),
+  outcomes: outcomesOf(of, seen, await namedOf(of, seen)),
 }));
 
 /** Revisions, newest first; shown even while none is in force. */

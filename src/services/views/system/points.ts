@@ -47,6 +47,9 @@ const RUNGS: Record<Exclude<RungKind, 'operating-max' | 'burst'>, keyof LadderVi
   'back-pressure': 'backPressure',
 };
 
+/** Of a valve that opens both ways, the side of the vacuum has no place on the ladder of its set pressure. */
+const ABOVE_SET: ReadonlySet<RungKind> = new Set(['relieving', 'maap']);
+
 /** The ladder of a relief point in the unit of its set pressure; none for vacuum and for what has no set pressure. */
 export function ladderOf(
   of: OpenedSystem,
@@ -69,7 +72,8 @@ export function ladderOf(
   const known = rungs.flatMap(({ kind, shown }) => {
     const key = kind === 'operating-max' || kind === 'burst' ? undefined : RUNGS[kind];
     const value = key && inUnit(shown);
-    return key && value !== undefined ? [[key, value] as const] : [];
+    if (value === undefined || (ABOVE_SET.has(kind) && set.shown.value > 0 && value < 0)) return [];
+    return key ? [[key, value] as const] : [];
   });
   return { unit: unitLabel(unit), state: { ...Object.fromEntries(known), set: set.shown.value } };
 }

@@ -73,11 +73,11 @@ function workedOf(evaluation: Evaluation, id: string): Worked {
   };
 }
 
-/** How far the allowed pressure lies above the MAWP, %. */
+/** How far the allowed pressure lies above the MAWP, %; nothing where the limit is one of vacuum. */
 function accumulationOf(seen: Seen, id: string): string {
   const limit = seen.evaluation?.sheets[`limit:${id}`];
   const [mawp, allowed] = [outputOf(limit, 'MAWP'), outputOf(limit, 'MAAP')];
-  if (!mawp || !allowed || toSI(mawp) === 0) return '–';
+  if (!mawp || !allowed || toSI(mawp) === 0 || toSI(allowed) < 0) return '–';
   return formatNumber((toSI(allowed) / toSI(mawp) - 1) * 100, 0);
 }
 
