@@ -1,5 +1,5 @@
 /* Opens a case for a reader: the records, what its gate reads, and whether its results are hidden from them. */
-import { type GateFacts } from '@domain/case';
+import { type GateFacts, unseenLeft } from '@domain/case';
 import { fail, ok, type Result } from '@domain/result';
 import { noteView } from '@data/check';
 import { type CaseFile, loadCaseFile } from '../../case-file';
@@ -18,6 +18,18 @@ export type OpenedCase = {
   today: string;
 };
 
+/**
+ * True when the reader checks this case and has worked it unseen to the end. Then another case that hides the same system
+ * does not shut their own check: what they would see here they have seen.
+ */
+function hasRevealed(facts: GateFacts, actor: Actor): boolean {
+  const persons = [actor.person.id, ...actor.standsFor];
+  const checks = facts.case.seats.some(
+    (seat) => seat.role === 'checker' && !seat.until && persons.includes(seat.person),
+  );
+  return checks && facts.reveals.length > 0 && !unseenLeft(facts);
+}
+
 /** Opens a case. UNKNOWN when the site has none of this number. */
 export async function openCase(ctx: Ctx, actor: Actor, number: string): Promise<Result<OpenedCase>> {
   const file = await loadCaseFile(ctx.db, actor.site, number);
@@ -26,7 +38,7 @@ export async function openCase(ctx: Ctx, actor: Actor, number: string): Promise<
   const seen = await gateFacts(ctx.db, file, day, false);
   const hiddenSet = await hiddenOf(ctx, actor);
   const touched = file.documents.some((one) => hiddenSet.documents.has(one.document.id));
-  const hidden = isHiddenFrom(seen, actor) || touched;
+  const hidden = isHiddenFrom(seen, actor) || (touched && !hasRevealed(seen, actor));
   return ok({ ctx, actor, file, facts: { ...seen, hidden }, hidden, hiddenSet, today: day });
 }
 
