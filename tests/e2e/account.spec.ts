@@ -6,7 +6,7 @@ import { startServer, type TestServer } from '../support/server';
 import { demoSignIns, type DemoPerson } from '../support/sign-in';
 
 /* Each page is read by axe four times, which takes its time on a small machine. */
-test.describe.configure({ timeout: 180_000 });
+test.describe.configure({ timeout: 360_000 });
 
 const SITE = '/s/ketterwold';
 const NEXT_PASSWORD = 'quick brick under water';
