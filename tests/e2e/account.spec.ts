@@ -214,6 +214,7 @@ test.describe('people', () => {
     const [context, page] = await signedIn(browser, server, coordinator);
     await page.goto(`${SITE}/people`);
     await page.getByRole('link', { name: operations.name }).click();
+    await expect(page.getByRole('heading', { level: 1 })).toHaveText(operations.name);
     const address = page.url();
     const plain = await browser.newContext({ baseURL: server.url, javaScriptEnabled: false });
     await plain.addCookies(await context.cookies());
@@ -235,7 +236,9 @@ test.describe('people', () => {
     await other.getByRole('button', { name: 'Save the record' }).click();
     await expect(other.getByRole('heading', { level: 1 })).toHaveText('Someone changed this meanwhile');
     await expect(other.getByRole('row', { name: /^Job/ })).toContainText('Shift leader');
-    await expectClean(other, 'the page of a problem');
+    /* Where scripts are off axe cannot run either: it reads the same markup in a page where they are on. */
+    await third.setContent(await other.content());
+    await expectClean(third, 'the page of a problem');
     await other.getByRole('link', { name: 'See the page as it is now' }).click();
     await expect(other.getByLabel('Job')).toHaveValue('Shift leader');
     await Promise.all([context.close(), plain.close()]);
