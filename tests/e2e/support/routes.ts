@@ -42,11 +42,7 @@ export const PAGES: readonly string[] = [
   '/mail',
 ];
 /** Pages of the site coordinator. */
-export const COORDINATORS: readonly string[] = [
-  `${SITE}/people`,
-  `${SITE}/people/new`,
-  `${SITE}/people/per_p04`,
-];
+export const COORDINATORS: readonly string[] = [`${SITE}/people/new`];
 /** Addresses where nothing is. */
 export const NOWHERE: readonly string[] = [
   '/no-such-page',
