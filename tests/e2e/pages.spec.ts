@@ -1,5 +1,4 @@
-/* Every page for every role: it answers, has one heading, logs nothing, breaks no policy, axe finds nothing, and its script is light. */
-import AxeBuilder from '@axe-core/playwright';
+/* Every page for every role: it answers, has one heading, logs nothing, breaks no policy, and its script is light. */
 import { type Page, type Response } from '@playwright/test';
 import { gzipSync } from 'node:zlib';
 import { expect, test } from '../support/fixtures';
@@ -8,8 +7,6 @@ import { COORDINATORS, NOWHERE, ONE_OF_EACH, PAGES } from './support/routes';
 
 test.afterEach(closeBrowsers);
 
-const WIDE = { width: 1440, height: 900 };
-const NARROW = { width: 390, height: 844 };
 /** Kilobytes (1,000 bytes) of compressed script at first load. */
 const LIMITS = { none: 0, plain: 10, island: 110, caseBeforeEditor: 180 };
 
@@ -30,14 +27,6 @@ async function visit(page: Page, path: string, status = 200): Promise<void> {
   expect(await page.title(), path).not.toBe('');
 }
 
-async function axe(page: Page, what: string): Promise<void> {
-  const { violations } = await new AxeBuilder({ page }).options({ resultTypes: ['violations'] }).analyze();
-  const told = violations.map(
-    ({ id, nodes }) => `${id}: ${nodes.map((node) => node.html.slice(0, 160)).join(' ')}`,
-  );
-  expect.soft(told, what).toEqual([]);
-}
-
 for (const [role, name] of Object.entries(ONE_OF_EACH)) {
   test(`every page opens for the ${role}, and the browser complains of nothing`, async ({
     browser,
@@ -52,41 +41,6 @@ for (const [role, name] of Object.entries(ONE_OF_EACH)) {
     }
     for (const path of COORDINATORS) await visit(page, path, role === 'coordinator' ? 200 : 403);
     for (const path of NOWHERE) await visit(page, path, 404);
-  });
-}
-
-/** Who has most to do on a page, so that axe reads its forms too. */
-function readerOf(path: string): string {
-  if (path.includes('/people')) return ONE_OF_EACH.coordinator;
-  if (path.includes('KW-2026-008')) return ONE_OF_EACH.checker;
-  if (path.includes('/summary')) return 'Rufus Hallam';
-  return path.includes('/field') ? ONE_OF_EACH.operations : ONE_OF_EACH.originator;
-}
-
-for (const [half, of] of [
-  ['outside the cases', (path: string) => !path.includes('/cases')],
-  ['of the cases', (path: string) => path.includes('/cases')],
-] as const) {
-  test(`axe finds nothing on the pages ${half}, wide and light, narrow and dark`, async ({
-    browser,
-    server,
-  }) => {
-    test.setTimeout(300_000);
-    const readers = new Map<string, Page>();
-    for (const path of [...PAGES, ...COORDINATORS, ...NOWHERE.slice(0, 1)].filter(of)) {
-      const name = readerOf(path);
-      const page = readers.get(name) ?? (await pageOf(browser, server, name));
-      readers.set(name, page);
-      await page.setViewportSize(WIDE);
-      await page.emulateMedia({ colorScheme: 'light', reducedMotion: 'reduce' });
-      await page.goto(path);
-      await axe(page, `${path} at 1440, light`);
-      await page.setViewportSize(NARROW);
-      await page.emulateMedia({ colorScheme: 'dark', reducedMotion: 'reduce' });
-      await axe(page, `${path} at 390, dark`);
-      const over = await page.evaluate(() => document.documentElement.scrollWidth - window.innerWidth);
-      expect.soft(over, `${path} is wider than a phone`).toBeLessThanOrEqual(0);
-    }
   });
 }
 
