@@ -135,6 +135,12 @@ test.describe('the account', () => {
     await expect(other).toHaveURL(/\/sign-in/);
     await signIn(other, checker.email, NEXT_PASSWORD);
     await expect(other).toHaveURL(/\/account$/);
+    // Other specs of this worker sign in as the same person.
+    await other.getByLabel('Present password').fill(NEXT_PASSWORD);
+    await other.getByLabel('New password', { exact: true }).fill(password);
+    await other.getByLabel('New password again').fill(password);
+    await other.getByRole('button', { name: 'Change password' }).click();
+    await expect(other.getByRole('status')).toContainText('Your password is changed.');
     await Promise.all([here.close(), there.close()]);
   });
 
