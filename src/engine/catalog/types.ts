@@ -2,12 +2,16 @@
 import { type Dimension } from '../quantity';
 import { type Inputs, type Worked } from '../sheet/types';
 
-/** One input of a method; `words` lists the allowed words of a choice; `rangeKey` names a row of the ranges of inputs. */
+/**
+ * One input of a method; `words` lists the allowed words of a choice; `rangeKey` names a row of the ranges of inputs;
+ * `each` says of what a numbered input (`flow`, `flow_2`, `flow_3` …) is given once for each.
+ */
 export type MethodInput = {
   name: string;
   meaning: string;
   dimension?: Dimension;
   rangeKey?: string;
+  each?: string;
   words?: string[];
   required: boolean;
 };
@@ -15,7 +19,11 @@ export type MethodInput = {
 /** One output of a method. */
 export type MethodOutput = { name: string; meaning: string; dimension?: Dimension };
 
-/** A calculation method: numbered, sourced, with its range of validity; `work` never throws on bad input, it refuses. */
+/**
+ * A calculation method: numbered, sourced, with its range of validity; `work` never throws on bad input, it refuses.
+ * `lists` is the word for one element (segment, point) where inputs come in numbered series (D, D_2, D_3 …) that are worked
+ * together; a list given to `calculate` is then spread over those names instead of being worked element by element.
+ */
 export type Method = {
   id: string;
   version: number;
@@ -26,5 +34,6 @@ export type Method = {
   validity: string;
   inputs: MethodInput[];
   outputs: MethodOutput[];
+  lists?: string;
   work(inputs: Inputs, edition?: string): Worked;
 };

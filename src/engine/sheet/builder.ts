@@ -3,8 +3,8 @@ import { convert, dimensionOf, type Q, unitLabel } from '../quantity';
 import { texNumber } from './tex';
 import { type Inputs, type Refusal, type SheetWarning, type Step, type Worked } from './types';
 
-/** How an input is described to the builder: its name and what it means, for sentences. */
-export type Described = { name: string; meaning: string };
+/** How an input is described to the builder: its name, what it means, and of what it is given when numbered, for sentences. */
+export type Described = { name: string; meaning: string; each?: string };
 
 /** Ends the work of one sheet; caught by `workSheet`, never seen outside. */
 class Refused extends Error {
@@ -40,6 +40,7 @@ export class SheetBuilder {
   constructor(
     readonly inputs: Inputs,
     private readonly described: readonly Described[],
+    private readonly element = 'vessel',
   ) {}
 
   /** Stops the sheet with a sentence about one input. */
@@ -60,7 +61,7 @@ export class SheetBuilder {
   private meaning(name: string): string {
     const [bare = name, index] = name.split(/_(?=\d+$)/);
     const found = this.described.find((d) => d.name === name || d.name === bare);
-    const place = index === undefined ? '' : ` of vessel ${index}`;
+    const place = index === undefined ? '' : ` of ${found?.each ?? 'vessel'} ${index}`;
     return found ? `${found.meaning} (${name})${place}` : name;
   }
 
@@ -191,12 +192,12 @@ export class SheetBuilder {
 
 /** Works one sheet: runs the body, and turns a refusal into the sheet's `refused`. */
 export function workSheet(
-  method: { id: string; version: number; inputs: readonly Described[] },
+  method: { id: string; version: number; inputs: readonly Described[]; lists?: string },
   inputs: Inputs,
   edition: string | undefined,
   body: (sheet: SheetBuilder) => void,
 ): Worked {
-  const sheet = new SheetBuilder(inputs, method.inputs);
+  const sheet = new SheetBuilder(inputs, method.inputs, method.lists);
   const { steps, outputs, warnings } = sheet;
   const worked: Worked = { method: `${method.id}@${method.version}`, steps, outputs, warnings };
   if (edition !== undefined) worked.edition = edition;

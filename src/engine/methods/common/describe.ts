@@ -2,7 +2,7 @@
 import { type MethodInput, type MethodOutput } from '../../catalog/types';
 import { type Dimension } from '../../quantity';
 
-type Extra = { rangeKey?: string; required?: boolean; words?: string[] };
+type Extra = { rangeKey?: string; required?: boolean; words?: string[]; each?: string };
 
 /** Describes one input; required unless said otherwise. */
 export function input(name: string, meaning: string, dimension?: Dimension, extra: Extra = {}): MethodInput {
