@@ -1,33 +1,37 @@
-/* Command line of the engine: reads one calculation or a list as JSON, prints the sheets as JSON. */
+/* Command line of the engine: a JSON document of cases in, one answer a case out, in the same order. */
 import { readFileSync } from 'node:fs';
-import { type CalcRequest, calculate } from '../src/engine/calc';
+import { casesOf, workCase } from '../src/engine/calc';
 
-/** Reads a file, or standard input when the name is `-`. */
-function read(file: string): string {
-  return readFileSync(file === '-' ? 0 : file, 'utf8');
-}
+const USAGE =
+  'Usage: npm run --silent calc -- FILE [--sheet]   (- for standard input; FILE holds { "cases": [{ "id", "topic", "inputs", "want" }] })';
 
-function say(sentence: string): void {
+function fail(sentence: string): void {
   process.stderr.write(`${sentence}\n`);
   process.exitCode = 1;
 }
 
-/** Works the file's request or requests and prints the answer in the same form (one, or a list). */
-function main(file: string | undefined): void {
-  if (file === undefined)
-    return say(
-      'Usage: npm run --silent calc -- FILE   (JSON { topic, inputs } or a list; - for standard input)',
-    );
-  let body: unknown;
-  try {
-    body = JSON.parse(read(file));
-  } catch (error) {
-    return say(`${file} cannot be read as JSON: ${error instanceof Error ? error.message : String(error)}`);
-  }
-  const answer = Array.isArray(body)
-    ? body.map((one: CalcRequest) => calculate(one))
-    : calculate(body as CalcRequest);
-  process.stdout.write(`${JSON.stringify(answer, null, 2)}\n`);
+/** The document of a file, or of standard input when the name is `-`. */
+function read(file: string): unknown {
+  return JSON.parse(readFileSync(file === '-' ? 0 : file, 'utf8').replace(/^\uFEFF/, ''));
 }
 
-main(process.argv[2]);
+/** Works the cases of the file and prints `{ "results": [ … ] }`; exit code 0 when every case was worked, else 1. */
+function main(args: readonly string[]): void {
+  const sheet = args.includes('--sheet');
+  const unknown = args.find((arg) => arg.startsWith('--') && arg !== '--sheet');
+  const [file, ...more] = args.filter((arg) => !arg.startsWith('--'));
+  if (unknown !== undefined || file === undefined || more.length > 0) return fail(USAGE);
+  let document: unknown;
+  try {
+    document = read(file);
+  } catch (error) {
+    return fail(`${file} can't be read as JSON: ${error instanceof Error ? error.message : String(error)}`);
+  }
+  const found = casesOf(document);
+  if ('wrong' in found) return fail(`${file}: ${found.wrong}`);
+  const results = found.cases.map((one) => workCase(one, { sheet }));
+  process.stdout.write(`${JSON.stringify({ results }, null, 1)}\n`);
+  if (results.some((one) => one.error)) process.exitCode = 1;
+}
+
+main(process.argv.slice(2));
