@@ -19,11 +19,7 @@ export type MethodInput = {
 /** One output of a method. */
 export type MethodOutput = { name: string; meaning: string; dimension?: Dimension };
 
-/**
- * A calculation method: numbered, sourced, with its range of validity; `work` never throws on bad input, it refuses.
- * `lists` is the word for one element (segment, point) where inputs come in numbered series (D, D_2, D_3 …) that are worked
- * together; a list given to `calculate` is then spread over those names instead of being worked element by element.
- */
+/** A calculation method: numbered, sourced, with its range of validity; `work` never throws on bad input, it refuses. */
 export type Method = {
   id: string;
   version: number;
@@ -34,6 +30,5 @@ export type Method = {
   validity: string;
   inputs: MethodInput[];
   outputs: MethodOutput[];
-  lists?: string;
   work(inputs: Inputs, edition?: string): Worked;
 };

@@ -40,7 +40,6 @@ export class SheetBuilder {
   constructor(
     readonly inputs: Inputs,
     private readonly described: readonly Described[],
-    private readonly element = 'vessel',
   ) {}
 
   /** Stops the sheet with a sentence about one input. */
@@ -192,12 +191,12 @@ export class SheetBuilder {
 
 /** Works one sheet: runs the body, and turns a refusal into the sheet's `refused`. */
 export function workSheet(
-  method: { id: string; version: number; inputs: readonly Described[]; lists?: string },
+  method: { id: string; version: number; inputs: readonly Described[] },
   inputs: Inputs,
   edition: string | undefined,
   body: (sheet: SheetBuilder) => void,
 ): Worked {
-  const sheet = new SheetBuilder(inputs, method.inputs, method.lists);
+  const sheet = new SheetBuilder(inputs, method.inputs);
   const { steps, outputs, warnings } = sheet;
   const worked: Worked = { method: `${method.id}@${method.version}`, steps, outputs, warnings };
   if (edition !== undefined) worked.edition = edition;
