@@ -1,5 +1,5 @@
 /* One calculation by JSON: { topic, inputs } in, results out. */
-import { methodById } from '../catalog';
+import { type Method, methodById } from '../catalog';
 import { type Q } from '../quantity';
 import { type Inputs, type Refusal, type SheetWarning, type Step, type Worked } from '../sheet';
 import { readUnit } from './units';
@@ -8,7 +8,10 @@ import { type CalcValue } from './value';
 /** A calculation that is asked for. */
 export type CalcRequest = { topic: string; inputs: Record<string, CalcValue>; edition?: string };
 
-/** What comes back. A list among the inputs is worked element by element: outputs are lists, steps are left out. */
+/**
+ * What comes back. A list under a numbered input (one a segment, one a point) is one calculation; any other list is worked
+ * element by element: outputs are lists, steps are left out.
+ */
 export type CalcAnswer = {
   topic: string;
   method?: string;
@@ -35,6 +38,17 @@ function scalar(given: CalcValue, index: number): Q | string | boolean {
 
 function row(inputs: Record<string, CalcValue>, index: number): Inputs {
   return Object.fromEntries(Object.entries(inputs).map(([name, given]) => [name, scalar(given, index)]));
+}
+
+/** Lists under numbered inputs written out: the first element under the bare name, further ones as name_2, name_3 …. */
+function spread(method: Method, inputs: Record<string, CalcValue>): Record<string, CalcValue> {
+  const numbered = new Set(method.inputs.filter((i) => i.each !== undefined).map((i) => i.name));
+  const entries = Object.entries(inputs).flatMap(([name, given]): [string, CalcValue][] => {
+    if (!numbered.has(name) || !Array.isArray(given.value)) return [[name, given]];
+    const all = given.value as readonly (number | string | boolean)[];
+    return all.map((value, place) => [place === 0 ? name : `${name}_${place + 1}`, { ...given, value }]);
+  });
+  return Object.fromEntries(entries);
 }
 
 /** Results of all places as lists. */
@@ -92,7 +106,7 @@ function malformed(request: unknown): CalcAnswer | undefined {
 export function calculate(request: CalcRequest): CalcAnswer {
   const wrong = malformed(request);
   if (wrong) return wrong;
-  const { topic, inputs, edition } = request;
+  const { topic, edition } = request;
   const method = methodById(topic);
   if (!method)
     return refusal(
@@ -101,6 +115,7 @@ export function calculate(request: CalcRequest): CalcAnswer {
       'topic',
       `There is no topic "${topic}" in this version of the engine.`,
     );
+  const inputs = spread(method, request.inputs);
   const lists = Object.values(inputs).flatMap((i) => (Array.isArray(i.value) ? [i.value.length] : []));
   const id = `${method.id}@${method.version}`;
   if (lists.length === 0) {
