@@ -16,6 +16,8 @@ const RANKINE = 5 / 9;
 const INCH_WATER = 249.08891;
 const HOUR = 3600;
 const YEAR = 365.25 * 86400;
+/** Normal cubic metres (0 °C, 101.325 kPa) in a cubic foot at 60 °F and the same pressure, as 29 CFR 1910.106 takes free air. */
+const STANDARD_FOOT = (FOOT ** 3 * 273.15) / (519.67 * RANKINE);
 
 /** Square metres in which the US form of the gas constant C, per square inch and psi, is turned into SI base units. */
 const C_SI = Math.sqrt(1) / (1e-6 * HOUR * 1000);
@@ -68,6 +70,8 @@ export const UNITS: Readonly<Record<string, Unit>> = {
   'US gpm': u('volume-flow', US_GALLON / 60, 'US gpm'),
   'ft3/min': u('volume-flow', FOOT ** 3 / 60, 'ft³/min'),
   'Nm3/h': u('normal-volume-flow', 1 / HOUR, 'Nm³/h'),
+  SCFH: u('normal-volume-flow', STANDARD_FOOT / HOUR, 'SCFH'),
+  SCFM: u('normal-volume-flow', STANDARD_FOOT / 60, 'SCFM'),
   mm2: u('area', 1e-6, 'mm²'),
   cm2: u('area', 1e-4, 'cm²'),
   m2: u('area', 1, 'm²'),

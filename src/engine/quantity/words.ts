@@ -29,6 +29,8 @@ const SPELLINGS: Record<string, string[]> = {
   'L/min': ['l/min', 'lpm', 'ltr/min'],
   'US gpm': ['gpm', 'usgpm', 'gal/min', 'usgal/min'],
   'ft3/min': ['cfm', 'cuft/min'],
+  SCFH: ['scfh', 'stdft3/h', 'cfhfreeair'],
+  SCFM: ['scfm', 'stdft3/min'],
   'Nm3/h': ['nm3/hr', 'nm3h', 'm3n/h', 'm3(n)/h'],
   mm2: ['sqmm', 'qmm'],
   in2: ['sqin', 'inch2', 'insq'],
