@@ -2,6 +2,7 @@
 import { fail, type Result } from '@domain/result';
 import { type Auth } from '@auth/index';
 import { type Actor, type Ctx } from '@services/context';
+import { workCases } from '@services/calculations';
 import { addPerson } from '@services/administer/add-person';
 import { agreeSheet, undoAgreement } from '@services/check/agree';
 import { raiseFinding, turnFinding } from '@services/check/findings';
@@ -19,7 +20,6 @@ import { keepPhotograph } from '@services/field/photographs';
 import { type StageAct, STAGE_ACTS } from '@services/stage/types';
 import { stageAct } from '@services/stage/stage-act';
 import { openCase } from '@services/views/case/open';
-import { calculate } from '@services/views/methods';
 
 /** What was sent is refused by itself: reaching that refusal means that permission was passed. */
 const NOTHING = {
@@ -48,8 +48,7 @@ const due =
 export const PROBES: Readonly<Record<string, Probe>> = {
   ...Object.fromEntries(STAGE_ACTS.map((act) => [act, stage(act)])),
   read: ({ ctx, actor, number }) => openCase(ctx, actor, number),
-  calculate: ({ actor }) =>
-    calculate({ id: actor.person.id, roles: actor.roles }, { topic: 'none', inputs: {} }),
+  calculate: ({ actor }) => workCases({ id: actor.person.id, roles: actor.roles }, { cases: [] }),
   raise: ({ ctx, actor }) => raiseCase(ctx, actor, NOTHING),
   copy: ({ ctx, actor, number }) => copyCase(ctx, actor, number, NOTHING),
   'edit-brief': ({ ctx, actor, number }) => editBrief(ctx, actor, number, NOTHING),

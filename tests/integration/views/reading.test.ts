@@ -11,7 +11,7 @@ import {
   systemSheets,
 } from '@services/views/system';
 import { dueView } from '@services/views/due';
-import { calculate, methodGroups, methodView } from '@services/views/methods';
+import { methodGroups, methodView } from '@services/views/methods';
 import { headingOf, myWorkView } from '@services/views/my-work';
 import { rulebookView } from '@services/views/rulebook';
 import { searchView } from '@services/views/search';
@@ -189,40 +189,6 @@ describe('lists', () => {
     const { rules } = value(await rulebookView(demo.ctx, reader));
     expect(rules.length).toBeGreaterThanOrEqual(30);
     expect(rules.every((one) => one.source !== '' && one.condition !== '')).toBe(true);
-  });
-});
-
-describe('a calculation for a program', () => {
-  const asker = (roles: Actor['roles']) => ({ id: 'p', roles });
-  const inputs = { heat: { value: 1000, unit: 'kW' } };
-
-  it('is worked for those whose roles calculate, and refused to an auditor', () => {
-    const sent = {
-      topic: 'f.vaporisation',
-      inputs: { Q: inputs.heat, latent_heat: { value: 360, unit: 'kJ/kg' } },
-    };
-    const worked = value(calculate(asker(['checker']), sent));
-    // W = Q/λ = 1000 kW / 360 kJ/kg = 2.778 kg/s = 10 000 kg/h, by hand.
-    expect(worked.outputs['relief_load']).toMatchObject({ unit: 'kg/h' });
-    expect((worked.outputs['relief_load'] as { value: number }).value).toBeCloseTo(10_000, 3);
-    expect(calculate(asker(['auditor']), sent)).toMatchObject({
-      ok: false,
-      problem: { code: 'NOT_PERMITTED' },
-    });
-  });
-
-  it('answers an unknown topic, an unknown unit and a bad input in sentences', () => {
-    const who = asker(['originator']);
-    expect(calculate(who, { topic: 'z.none', inputs: {} })).toMatchObject({
-      ok: false,
-      problem: { code: 'UNKNOWN' },
-    });
-    const unit = calculate(who, { topic: 'a.gas', inputs: { W: { value: 1, unit: 'stone' } } });
-    expect(unit).toMatchObject({
-      ok: false,
-      problem: { code: 'SCHEMA', errors: [{ path: 'inputs/W/unit' }] },
-    });
-    expect(value(calculate(who, { topic: 'a.gas', inputs: {} })).refused?.text).toBeTruthy();
   });
 });
 
