@@ -9,6 +9,8 @@ import { LIQUID_BACKPRESSURE } from '../methods/c-liquid/backpressure';
 import { LIQUID } from '../methods/c-liquid/liquid';
 import { LIQUID_NONCERTIFIED } from '../methods/c-liquid/noncertified';
 import { VISCOSITY_FACTOR } from '../methods/c-liquid/viscosity';
+import { FIRE_SUPERCRITICAL } from '../methods/e-fire/supercritical';
+import { FIRE_UNWETTED } from '../methods/e-fire/unwetted';
 import { FIRE_INSULATION } from '../methods/e-fire/insulation';
 import { FIRE_WETTED } from '../methods/e-fire/wetted';
 import { BLOCKED_OUTLET } from '../methods/f-loads/blocked-outlet';
@@ -37,6 +39,8 @@ export const METHODS: readonly Method[] = [
   LIQUID_NONCERTIFIED,
   VISCOSITY_FACTOR,
   FIRE_INSULATION,
+  FIRE_SUPERCRITICAL,
+  FIRE_UNWETTED,
   FIRE_WETTED,
   BLOCKED_OUTLET,
   CHECK_VALVE,

@@ -1,6 +1,7 @@
 /* Reading the vessels of a wetted-fire sheet and showing the wetted area of each. */
 import { fromSI, toSI } from '../../quantity';
 import { type SheetBuilder } from '../../sheet';
+import { numbered } from '../common/numbered';
 import { SYSTEM_UNITS, type System } from '../common/system';
 import {
   effectiveHeight,
@@ -18,15 +19,10 @@ const CLAUSE = 'API 521, effect of fire on the wetted surface';
 /** The most vessels one sheet takes. */
 export const MAX_VESSELS = 20;
 
-/** Names of the n-th vessel's inputs: bare for the first, with _2, _3 … after it. */
-function named(name: string, n: number): string {
-  return n === 1 ? name : `${name}_${n}`;
-}
-
 /** How many vessels the inputs describe: the first gap ends the list. */
 export function vesselCount(sheet: SheetBuilder): number {
   let count = 1;
-  while (count < MAX_VESSELS && sheet.has(named('D', count + 1))) count += 1;
+  while (count < MAX_VESSELS && sheet.has(numbered('D', count + 1))) count += 1;
   return count;
 }
 
@@ -40,9 +36,13 @@ function length(
   return toSI({ value: sheet.number(name, unit, bounds, tex), unit });
 }
 
-/** Where a shared place (fire height) or a vessel's own input stands; elevation may lie below the fire's base. */
-function readVessel(sheet: SheetBuilder, n: number, unit: string) {
-  const at = (name: string) => named(name, n);
+/** The n-th vessel in metres, and the height of its lowest point above the base of the fire, which may lie below it. */
+export function readShape(
+  sheet: SheetBuilder,
+  n: number,
+  unit: string,
+): { vessel: Vessel; elevation: number } {
+  const at = (name: string) => numbered(name, n);
   const orientation = sheet.word<Orientation>(
     at('orientation'),
     ORIENTATIONS,
@@ -52,14 +52,13 @@ function readVessel(sheet: SheetBuilder, n: number, unit: string) {
   const sphere = orientation === 'sphere';
   const L = sphere ? 0 : length(sheet, at('L'), unit, { min: 0 }, `L_{${n}}`);
   const heads = sphere ? 'hemispherical' : sheet.word<Heads>(at('heads'), HEADS);
-  const level = length(sheet, at('liquid_level'), unit, { min: 0 }, `h_{${n}}`);
   const elevation = length(sheet, at('elevation_of_bottom'), unit, {}, `z_{${n}}`);
-  return { vessel: { orientation, D, L, heads }, level, elevation };
+  return { vessel: { orientation, D, L, heads }, elevation };
 }
 
 /** The tag given for the n-th vessel, or its number. */
-function label(sheet: SheetBuilder, n: number): string {
-  const tag = sheet.inputs[named('tag', n)];
+export function vesselLabel(sheet: SheetBuilder, n: number): string {
+  const tag = sheet.inputs[numbered('tag', n)];
   return typeof tag === 'string' ? tag : `vessel ${n}`;
 }
 
@@ -83,9 +82,9 @@ function heightStep(
       clause: CLAUSE,
     },
     (v) => {
-      const reach = `${v('fire_height')} - ${v(named('elevation_of_bottom', n))}`;
+      const reach = `${v('fire_height')} - ${v(numbered('elevation_of_bottom', n))}`;
       const cap = vessel.orientation === 'sphere' ? `\\max(${v('R')},\\ ${reach})` : reach;
-      return `\\max(0,\\ \\min(${v(named('liquid_level', n))},\\ ${cap}))`;
+      return `\\max(0,\\ \\min(${v(numbered('liquid_level', n))},\\ ${cap}))`;
     },
   );
 }
@@ -103,28 +102,29 @@ function areaStep(
     {
       key: `A_${n}`,
       tex: `A_{${n}}`,
-      meaning: `wetted area of ${name}, ${describe(vessel.orientation, vessel.heads)}`,
+      meaning: `wetted area of ${name}, ${shapeWords(vessel.orientation, vessel.heads)}`,
       value: area,
       unit,
       clause: 'exact geometry of shell and heads',
     },
     (v) =>
       vessel.orientation === 'sphere'
-        ? `\\pi \\cdot ${v(named('D', n))} \\cdot ${v(`he_${n}`)}`
-        : `A_{shell+heads}(${v(named('D', n))},\\ ${v(named('L', n))},\\ ${v(`he_${n}`)})`,
+        ? `\\pi \\cdot ${v(numbered('D', n))} \\cdot ${v(`he_${n}`)}`
+        : `A_{shell+heads}(${v(numbered('D', n))},\\ ${v(numbered('L', n))},\\ ${v(`he_${n}`)})`,
   );
 }
 
 /** The steps of one vessel; its wetted area in the system's unit. */
 function vesselSteps(sheet: SheetBuilder, n: number, fireHeight: number, system: System): number {
   const u = SYSTEM_UNITS[system];
-  const { vessel, level, elevation } = readVessel(sheet, n, u.L);
-  const name = label(sheet, n);
+  const { vessel, elevation } = readShape(sheet, n, u.L);
+  const level = length(sheet, numbered('liquid_level', n), u.L, { min: 0 }, `h_{${n}}`);
+  const name = vesselLabel(sheet, n);
   const full = vesselHeight(vessel);
   if (level > full * 1.0001)
     sheet.refuse(
       'VALUE_IMPOSSIBLE',
-      named('liquid_level', n),
+      numbered('liquid_level', n),
       `The liquid level of ${name} is above its inside height of ${fromSI(full, u.L).value.toFixed(2)} ${u.L}.`,
     );
   const si = effectiveHeight(vessel, { level, elevation, fireHeight });
@@ -139,7 +139,8 @@ function vesselSteps(sheet: SheetBuilder, n: number, fireHeight: number, system:
   return area;
 }
 
-function describe(orientation: Orientation, heads: Heads): string {
+/** A shape in words. */
+export function shapeWords(orientation: Orientation, heads: Heads): string {
   return orientation === 'sphere' ? 'sphere' : `${orientation}, ${heads} heads`;
 }
 

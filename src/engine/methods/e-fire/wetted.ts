@@ -4,9 +4,9 @@ import { type SheetBuilder, workSheet } from '../../sheet';
 import { input, optional, output } from '../common/describe';
 import { SYSTEM_UNITS, type System, systemOf } from '../common/system';
 import { vaporisationStep } from '../f-loads/latent';
+import { drainageAdequate, FIRE_CREDIT_INPUTS, fireFactor } from './credits';
 import { HEADS, ORIENTATIONS } from './geometry';
 import { FIRE_FORMS, fireHeat } from './heat';
-import { insulationStep } from './insulation';
 import { vesselCount, vesselsArea } from './vessels';
 
 const CLAUSE = 'API 521, heat absorption of wetted surfaces';
@@ -35,23 +35,6 @@ function totalArea(sheet: SheetBuilder, system: System): number {
       'The fire wets nothing: no liquid lies below the fire height. Work the vessel as unwetted.',
     );
   return area;
-}
-
-/** The environment factor: as given, from insulation, or 1 for a bare vessel. */
-function environment(sheet: SheetBuilder): number {
-  if (sheet.has('F')) return sheet.number('F', '-', { min: 0, max: 1 });
-  if (sheet.has('k_ins')) return insulationStep(sheet);
-  return sheet.keep('F', 1, 'F');
-}
-
-/** Whether drainage and fire fighting are adequate; a silent yes is said in a warning. */
-function drainage(sheet: SheetBuilder): boolean {
-  if (!sheet.has('adequate_drainage'))
-    sheet.warn(
-      'DRAINAGE_ASSUMED',
-      'Adequate drainage and fire fighting are assumed; without them the heat input is 64 % higher.',
-    );
-  return sheet.flag('adequate_drainage', true);
 }
 
 /** e.fire-wetted: fire on wetted vessels. */
@@ -83,20 +66,7 @@ export const FIRE_WETTED: Method = {
       'allowance for wetted piping as a fraction of the vessels’ area',
       'dimensionless',
     ),
-    optional('F', 'environment factor (1 when neither F nor insulation is given)', 'dimensionless', {
-      rangeKey: 'environmentFactor',
-    }),
-    optional('k_ins', 'conductivity of the insulation', 'heat-conductivity', {
-      rangeKey: 'insulationConductivity',
-    }),
-    optional('thickness', 'thickness of the insulation', 'length', { rangeKey: 'insulationThickness' }),
-    optional('T_process', 'process temperature at relief', 'temperature', {
-      rangeKey: 'relievingTemperature',
-    }),
-    optional(
-      'adequate_drainage',
-      'whether drainage and fire fighting are adequate (yes, with a warning, when not given)',
-    ),
+    ...FIRE_CREDIT_INPUTS,
     optional('latent_heat', 'latent heat at relief', 'specific-energy', { rangeKey: 'latentHeat' }),
   ],
   outputs: [
@@ -112,8 +82,8 @@ export const FIRE_WETTED: Method = {
       const system = systemOf(inputs, ['D']);
       const u = SYSTEM_UNITS[system];
       const area = totalArea(sheet, system);
-      const F = environment(sheet);
-      const drained = drainage(sheet);
+      const F = fireFactor(sheet);
+      const drained = drainageAdequate(sheet);
       const constant = drained ? FIRE_FORMS[system].drained : FIRE_FORMS[system].undrained;
       const heat = sheet.step(
         {
@@ -126,7 +96,6 @@ export const FIRE_WETTED: Method = {
         },
         (v) => `${constant} \\cdot ${v('F')} \\cdot ${v('A')}^{0.82}`,
       );
-      sheet.output('F', F);
       sheet.output('heat_input', heat, u.heat);
       if (sheet.has('latent_heat')) vaporisationStep(sheet, heat, system);
     });
