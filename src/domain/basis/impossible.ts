@@ -1,7 +1,7 @@
 /* Figures that physics does not allow, among those that a change has touched. */
 import { methodById } from '@engine/catalog';
 import type { FieldError } from '@domain/result';
-import { checkRange, type RangeContext } from '@domain/rules/ranges';
+import { checkRange, type RangeContext } from '@engine/ranges';
 import { describePath } from './describe';
 import { isKnown, type Path } from './figures';
 import { isFigure, isLeaf } from './leaves';

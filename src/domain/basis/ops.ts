@@ -2,7 +2,7 @@
 import { z } from 'zod';
 import { headerSchema, type Header } from '@domain/header/header';
 import { fail, ok, type Result } from '@domain/result';
-import type { RangeContext } from '@domain/rules/ranges';
+import type { RangeContext } from '@engine/ranges';
 import { basisSchema, type Basis } from './basis';
 import { sameContent } from './canonical';
 import { describePath } from './describe';

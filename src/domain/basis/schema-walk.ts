@@ -1,7 +1,7 @@
 /* Following a path through the schemas: which field stands there, its words, its range key. */
 import { z } from 'zod';
 import { headerSchema } from '@domain/header/header';
-import { unitsOfKey } from '@domain/rules/ranges';
+import { unitsOfKey } from '@engine/ranges';
 import { dimensionOf, type Dimension } from '@engine/quantity';
 import { basisSchema } from './basis';
 import { FIELDS, wordsOfName, type FieldMeta } from './fields';

@@ -1,5 +1,4 @@
 /* The public face of site rules. */
 export * from './parameter-row';
-export * from './range-row';
-export * from './ranges';
+export * from '@engine/ranges';
 export * from './site-rules';

@@ -2,13 +2,13 @@
 import { z } from 'zod';
 import { hashOf } from '@domain/basis/canonical';
 import { daySchema, quantitySchema, statusSchema, STATUSES, type Hash } from '@domain/basis/figures';
+import { RANGES } from '@engine/ranges';
 import { SCENARIOS } from '@domain/scenarios/list';
 import { fail, ok, type FieldError, type Result } from '@domain/result';
 import { CONDUCT_PARAMETERS } from './parameters-conduct';
 import { DEVICE_PARAMETERS } from './parameters-devices';
 import { PROCESS_PARAMETERS } from './parameters-process';
 import { type Parameter, type ParameterValue } from './parameter-row';
-import { RANGES } from './ranges';
 
 const JUDGEMENT_PARAMETERS = [...DEVICE_PARAMETERS, ...PROCESS_PARAMETERS];
 export const PARAMETERS: readonly Parameter[] = [...JUDGEMENT_PARAMETERS, ...CONDUCT_PARAMETERS];

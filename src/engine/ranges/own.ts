@@ -1,6 +1,7 @@
 /* Ranges for the figures of a document that the rulebook gives none; each says from what it was set. */
-import { row, type RangeRow } from './range-row';
+import { row, type RangeRow } from './row';
 
+/** Ranges of our own, by key. */
 export const OWN_RANGES: readonly RangeRow[] = [
   // Pressures. Common practice, no source: pilots and balanced devices reach 70 % of set; 50 % is the site limit.
   row('backPressureLimit', 'limit of the total back pressure', 'kPa_g', [0, 20, 20700, 690000], {

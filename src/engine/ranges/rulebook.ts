@@ -1,8 +1,10 @@
 /* Ranges of inputs as the rulebook sets them (section 3): fences against slips, not limits of good design. */
-import { row, type RangeRow } from './range-row';
+import { row, type RangeRow } from './row';
 
-// Where the rulebook bounds a figure by another one (0.95 × set, 0.5 × set, the critical pressure), the fence here is
-// the widest that any value of the other allows; the narrow comparison is a rule.
+/**
+ * Ranges of the rulebook, by key. Where it bounds a figure by another one (0.95 × set, 0.5 × set, the critical pressure),
+ * the fence here is the widest that any value of the other allows; the narrow comparison is a rule.
+ */
 export const RULEBOOK_RANGES: readonly RangeRow[] = [
   row('mawp', 'MAWP / PS / design pressure, vessel or exchanger side', 'kPa_g', [0, 100, 35000, 700000], {
     open: true,

@@ -1,10 +1,10 @@
 /* All ranges of inputs by key, and the check of a figure against them. */
-import { convert, dimensionOf, formatNumber, formatQuantity, unitLabel, type Q } from '@engine/quantity';
-import { capital } from '@domain/basis/fields';
-import { type Range, type RangeRow } from './range-row';
-import { OWN_RANGES } from './ranges-own';
-import { RULEBOOK_RANGES } from './ranges-rulebook';
+import { convert, dimensionOf, formatNumber, formatQuantity, unitLabel, type Q } from '../quantity';
+import { OWN_RANGES } from './own';
+import { type Range, type RangeRow } from './row';
+import { RULEBOOK_RANGES } from './rulebook';
 
+/** Every range by its key. */
 export const RANGES: Readonly<Record<string, RangeRow>> = Object.fromEntries(
   [...RULEBOOK_RANGES, ...OWN_RANGES].map((row) => [row.key, row]),
 );
@@ -72,7 +72,8 @@ function verdictOf(value: number, range: Range, open: boolean): RangeCheck['verd
 export function checkRange(key: string, q: Q, context: RangeContext = {}, label?: string): RangeCheck {
   const row = Object.hasOwn(RANGES, key) ? RANGES[key] : undefined;
   if (!row) return { verdict: 'possible' };
-  const name = capital(label ?? row.meaning);
+  const said = label ?? row.meaning;
+  const name = said.charAt(0).toUpperCase() + said.slice(1);
   const fence = fenceFor(row, q, context);
   if (!fence) {
     const units = [row.unit, ...(row.also ?? []).map((other) => other.unit)].map(
