@@ -7,6 +7,7 @@ import { isPublic } from './http/access';
 import { refuse } from './http/answer';
 import { readSent } from './http/body';
 import { secureHeaders } from './http/headers';
+import { keptPage } from './http/kept-pages';
 import { comesFromHere, isUnsafe } from './http/origin';
 import { problemResponse } from './http/problem';
 import { newRequestId } from './http/request-id';
@@ -67,7 +68,7 @@ async function serve(context: APIContext, next: MiddlewareNext, runtime: Runtime
   // An unknown address of the interface tells a stranger nothing, not even that it is unknown.
   const pattern = isApi(context) && routePattern === '/404' ? url.pathname : routePattern;
   if (!locals.who && !isPublic({ pattern, method: request.method }, catcherOpen)) return deny(context);
-  return toldAsProblem(context, await next());
+  return toldAsProblem(context, await keptPage(context, next));
 }
 
 /** One line a request; an address whose route holds a secret is logged as its route. */

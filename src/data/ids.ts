@@ -1,4 +1,5 @@
 /* Identifiers: a short prefix that says what it names, and a ULID that sorts by birth. */
+import { randomFillSync } from 'node:crypto';
 import { monotonicFactory } from 'ulid';
 
 const PREFIXES = {
@@ -43,12 +44,26 @@ const PREFIXES = {
   moved: 'mvd',
   trail: 'trl',
   element: 'el',
+  form: 'form',
   paper: 'pap',
 } as const;
 
 export type IdKind = keyof typeof PREFIXES;
 
-const next = monotonicFactory();
+/** Random bytes are drawn many at a time: asking the system for each character of an identifier costs more than the rest of it. */
+const pool = new Uint32Array(512);
+let left = 0;
+
+function random(): number {
+  if (left === 0) {
+    randomFillSync(pool);
+    left = pool.length;
+  }
+  left -= 1;
+  return (pool[left] ?? 0) / 2 ** 32;
+}
+
+const next = monotonicFactory(random);
 
 /** A new identifier of a kind, e.g. `case_01KBD…`; later ones sort after earlier ones within this process. */
 export function newId(kind: IdKind): string {

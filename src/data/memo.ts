@@ -39,3 +39,20 @@ export function untilNextWrite<T>(db: Db, key: readonly (string | number | boole
   if (kept.size > HELD_AT_MOST && !oldest.done) kept.delete(oldest.value);
   return value;
 }
+
+const heldWith = new WeakMap<object, Map<string, Promise<unknown>>>();
+
+/**
+ * A value worked out of something that was itself read once and kept, such as an opened case: it is worked once for that
+ * object and goes with it. What differs at every call, such as the key of a form, must not be part of it.
+ */
+export function keptWith<T>(owner: object, name: string, read: () => Promise<T>): Promise<T> {
+  const held = heldWith.get(owner) ?? new Map<string, Promise<unknown>>();
+  heldWith.set(owner, held);
+  const known = held.get(name);
+  if (known) return known as Promise<T>;
+  const value = read();
+  held.set(name, value);
+  value.catch(() => held.delete(name));
+  return value;
+}

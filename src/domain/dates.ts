@@ -127,14 +127,25 @@ export function addHours(instant: Instant, hours: number): Instant {
   return `${dayOfCount(days)}T${two(hour)}:${two(minute)}:${two(second)}.${String(left % 1000).padStart(3, '0')}Z`;
 }
 
-/** The day that it is at a site when this instant passes; `zone` is an IANA time zone. */
-export function dayIn(instant: Instant, zone: string): Day {
-  const parts = new Intl.DateTimeFormat('en', {
+/** Making a formatter costs far more than using it, and every request asks what day it is. */
+const CALENDARS = new Map<string, Intl.DateTimeFormat>();
+
+function calendarOf(zone: string): Intl.DateTimeFormat {
+  const known = CALENDARS.get(zone);
+  if (known) return known;
+  const made = new Intl.DateTimeFormat('en', {
     timeZone: zone,
     year: 'numeric',
     month: '2-digit',
     day: '2-digit',
-  }).formatToParts(millisecondsOf(instant));
+  });
+  CALENDARS.set(zone, made);
+  return made;
+}
+
+/** The day that it is at a site when this instant passes; `zone` is an IANA time zone. */
+export function dayIn(instant: Instant, zone: string): Day {
+  const parts = calendarOf(zone).formatToParts(millisecondsOf(instant));
   const part = (type: Intl.DateTimeFormatPartTypes) => parts.find((one) => one.type === type)?.value ?? '';
   return `${part('year').padStart(4, '0')}-${part('month')}-${part('day')}`;
 }

@@ -53,6 +53,10 @@ async function rates(server: TestServer, cookie: string, number: string): Promis
       ratio >= LIMIT_RATIO,
       `at least ${100 * LIMIT_RATIO} %`,
     );
+    const anew = await measure(`${server.url}${path}`, cookie, { anew: true });
+    process.stdout.write(
+      `${'  rendered anew each time'.padEnd(34)} ${told(anew).padStart(34)}   for comparison\n`,
+    );
   }
 }
 
@@ -79,7 +83,7 @@ async function weights(server: TestServer, cookie: string, number: string): Prom
   }
 }
 
-const server = await startServer({ data: 'large', env: { SETWRIGHT_LOG_LEVEL: 'warn' } });
+const server = await startServer({ data: 'large' });
 try {
   const cookie = await signInAs(server.url, 'originator');
   const number = await caseNumber(server, cookie);

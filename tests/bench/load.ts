@@ -10,7 +10,23 @@ function percentile(times: number[], share: number): number {
   return sorted[Math.min(sorted.length - 1, Math.floor(sorted.length * share))] ?? Number.NaN;
 }
 
-function run(url: string, cookie: string, seconds: number): Promise<Load> {
+/** Requests whose query differs each time, so that no page at hand answers them. */
+function addresses(
+  url: string,
+  anew: boolean,
+): { setupRequest?: (request: autocannon.Request) => autocannon.Request } {
+  if (!anew) return {};
+  const { pathname } = new URL(url);
+  let n = 0;
+  return {
+    setupRequest: (request) => {
+      n += 1;
+      return { ...request, path: `${pathname}?anew=${n}` };
+    },
+  };
+}
+
+function run(url: string, cookie: string, seconds: number, anew: boolean): Promise<Load> {
   const times: number[] = [];
   let failed = 0;
   return new Promise((resolve, reject) => {
@@ -19,6 +35,7 @@ function run(url: string, cookie: string, seconds: number): Promise<Load> {
       connections: CONNECTIONS,
       duration: seconds,
       headers: cookie === '' ? {} : { cookie },
+      requests: [{ method: 'GET' as const, ...addresses(url, anew) }],
     };
     const running = autocannon(options, (error: Error | null, result) => {
       if (error) reject(error);
@@ -37,7 +54,11 @@ function run(url: string, cookie: string, seconds: number): Promise<Load> {
 }
 
 /** Warms the address up, then measures it at 20 connections. Times are in milliseconds; `failed` counts answers other than 200. */
-export async function measure(url: string, cookie: string, seconds = 8): Promise<Load> {
-  await run(url, cookie, 2);
-  return run(url, cookie, seconds);
+export async function measure(
+  url: string,
+  cookie: string,
+  { seconds = 8, anew = false } = {},
+): Promise<Load> {
+  await run(url, cookie, 2, anew);
+  return run(url, cookie, seconds, anew);
 }

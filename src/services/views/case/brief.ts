@@ -1,6 +1,7 @@
 /* The brief of a case: what changes and why, papers, people, affected systems; with the words of its forms. */
 import { type Brief, can, conflictsOfSeat, type Paper, type Role, type SeatRole } from '@domain/case';
 import { plainText, type Rich } from '@domain/text';
+import { keptWith } from '@data/memo';
 import { peopleOfSite, type Person } from '@data/people';
 import { domainSeats, onFile } from '../../case-file';
 import { whoOf } from '../../context';
@@ -97,7 +98,11 @@ function textsOf(of: OpenedCase): TextView[] {
 }
 
 /** The brief for its reader: prose without figures while results are hidden from them. */
-export async function briefView(of: OpenedCase): Promise<BriefView> {
+export function briefView(of: OpenedCase): Promise<BriefView> {
+  return keptWith(of, 'brief', () => readBrief(of));
+}
+
+async function readBrief(of: OpenedCase): Promise<BriefView> {
   const { file, actor } = of;
   const { brief } = file.row;
   const may = can(whoOf(actor), 'edit-brief', onFile(file));

@@ -5,11 +5,11 @@ import { movedResults, type MovedResult } from '@domain/difference';
 import { groupLabel } from '@domain/projections';
 import { ok, type Result } from '@domain/result';
 import { formatNumber, type Q } from '@engine/quantity';
-import { newId } from '@data/ids';
 import { type CaseDocumentFile, onFile } from '../../case-file';
 import { whoOf } from '../../context';
 import { mergeOnto } from '../../stage/carry-over';
 import { inline, shownQ } from '../shown';
+import { newKey } from '../../form-key';
 import { differenceRows, type DifferenceRowView } from './difference-rows';
 import { noteLook, type OpenedCase } from './open';
 import { shownAny } from './shown-values';
@@ -136,7 +136,7 @@ async function carryOverOf(of: OpenedCase, one: CaseDocumentFile, part: string):
           act: {
             action: `/api/v1/sites/${of.file.site.slug}/cases/${row.number}/acts/CARRY_OVER`,
             version: row.version,
-            key: newId('element'),
+            key: newKey(),
             document: one.document.id,
           },
         }

@@ -1,6 +1,5 @@
-/* What the form that raises a case offers: the systems of the site by unit, and a key against sending twice. */
+/* What the form that raises a case offers: the systems of the site by unit. */
 import { listDocuments } from '@data/documents';
-import { newId } from '@data/ids';
 import { listUnits } from '@data/site';
 import { type Actor, type Ctx } from '../../context';
 
@@ -21,9 +20,4 @@ export async function systemChoices(
         ...(unit ? { group: `${unit.tag} ${unit.name}` } : {}),
       };
     });
-}
-
-/** A fresh key for a form that makes something. */
-export function newKey(): string {
-  return newId('element');
 }

@@ -10,6 +10,7 @@ import { orderOfScenario, scenarioByKey, sentencesFor } from '@domain/scenarios'
 import { type CaseDocumentFile, onFile } from '../../case-file';
 import { whoOf } from '../../context';
 import { type Evaluated } from '../../evaluate-document';
+import { keptWith } from '@data/memo';
 import { areaUnit, loadUnit, rowFigures, scaleOf, type Scale } from './scenario-figures';
 import { answerViews, type AnswerView, calcChoices, type Choices } from './scenario-answers';
 import { noteLook, type OpenedCase } from './open';
@@ -204,6 +205,10 @@ export async function scenariosView(of: OpenedCase, tag: string | null): Promise
   if (!found.ok) return found;
   const one = found.value;
   await noteLook(of, `scenarios ${one.document.tag}`);
+  return ok(await keptWith(of, `scenarios ${one.document.tag}`, () => Promise.resolve(scenariosOf(of, one))));
+}
+
+function scenariosOf(of: OpenedCase, one: CaseDocumentFile): ScenariosView {
   const both = bothOf(one, of.hidden);
   const may = can(whoOf(of.actor), 'edit-document', onFile(of.file));
   const editable = may.ok && one.working?.state === 'working' && !of.hidden;
@@ -212,7 +217,7 @@ export async function scenariosView(of: OpenedCase, tag: string | null): Promise
     : may.sentence;
   const list = both ? sorted(both.doc) : [];
   const units = both?.doc.units ?? 'SI';
-  return ok({
+  return {
     tabs: systemTabs(of, 'scenarios', one.document.tag),
     system: one.document.tag,
     version: one.working?.version ?? null,
@@ -225,5 +230,5 @@ export async function scenariosView(of: OpenedCase, tag: string | null): Promise
     units: { load: loadUnit(units), area: areaUnit(units), used: '% of installed' },
     scenarios: both ? list.map((scenario, i) => scenarioView(of, both, scenario, i + 1)) : [],
     choices: both ? calcChoices(both.doc, groupLabel) : { load: [], size: [], fluids: [], groups: [] },
-  });
+  };
 }

@@ -3,6 +3,7 @@ import { agreementOf, changedSheets, type DocumentFacts, unseenDifferences, unse
 import { type Sheet, type Verdict } from '@domain/evaluate';
 import { methodById } from '@engine/catalog';
 import { convert, dimensionOf, displayUnit, formatNumber, unitLabel } from '@engine/quantity';
+import { keptWith } from '@data/memo';
 import { type CaseDocumentFile } from '../../case-file';
 import { noteLook, type OpenedCase } from './open';
 import { knownSheets, sheetTitle } from './places';
@@ -169,5 +170,7 @@ function systemOf(of: OpenedCase, one: CaseDocumentFile): SheetsOfSystem {
 /** The sheets of every system of the case. */
 export async function sheetsView(of: OpenedCase): Promise<SheetsView> {
   await noteLook(of, 'sheets');
-  return { hidden: of.hidden, systems: of.file.documents.map((one) => systemOf(of, one)) };
+  return keptWith(of, 'sheets', () =>
+    Promise.resolve({ hidden: of.hidden, systems: of.file.documents.map((one) => systemOf(of, one)) }),
+  );
 }

@@ -1,8 +1,8 @@
 /* What the sign form of a part needs: who signs, which words, bound to which content; only where the reader may act. */
 import { type Act } from '@domain/case';
-import { newId } from '@data/ids';
 import { pageHash, signingOf } from '../../stage/sign';
 import { isStageAct } from '../../stage/types';
+import { newKey } from '../../form-key';
 import { type CaseFrame } from './frame';
 import { type OpenedCase } from './open';
 
@@ -38,7 +38,7 @@ export function signingView(
       pageHash: hash,
       label: words.label,
       version: frame.version,
-      key: newId('element'),
+      key: newKey(),
     },
   };
 }
