@@ -24,6 +24,7 @@ import { ACCUMULATION } from '../methods/h-limits/accumulation';
 import { SET_TOLERANCE } from '../methods/h-limits/tolerance';
 import { ISO_GAS, ISO_LIQUID, ISO_STEAM } from '../methods/i-iso4126/iso';
 import { LETTERS } from '../methods/i-letters/letter-method';
+import { TANK_METHODS } from '../methods/k-tanks';
 import { type Method } from './types';
 
 /** All methods of the engine. */
@@ -56,4 +57,5 @@ export const METHODS: readonly Method[] = [
   ISO_GAS,
   ISO_STEAM,
   ISO_LIQUID,
+  ...TANK_METHODS,
 ];
