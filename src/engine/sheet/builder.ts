@@ -1,10 +1,11 @@
 /* Builds a sheet: reads inputs with refusals, keeps symbols, and makes equation and substitution from one template. */
 import { convert, dimensionOf, type Q, unitLabel } from '../quantity';
+import { checkRange, standing } from '../ranges';
 import { texNumber } from './tex';
 import { type Inputs, type Refusal, type SheetWarning, type Step, type Worked } from './types';
 
-/** How an input is described to the builder: its name, what it means, and of what it is given when numbered, for sentences. */
-export type Described = { name: string; meaning: string; each?: string };
+/** How an input is described to the builder: name, meaning, of what it is given when numbered, and the range it keeps. */
+export type Described = { name: string; meaning: string; each?: string; rangeKey?: string };
 
 /** Ends the work of one sheet; caught by `workSheet`, never seen outside. */
 class Refused extends Error {
@@ -57,9 +58,19 @@ export class SheetBuilder {
     return this.inputs[name] !== undefined;
   }
 
+  /** The description of an input; a numbered one (`D_2`) may be described by its bare name. */
+  private describedAs(name: string): Described | undefined {
+    return this.described.find((d) => d.name === name) ?? this.describedBare(name);
+  }
+
+  private describedBare(name: string): Described | undefined {
+    const bare = name.replace(/_\d+$/, '');
+    return bare === name ? undefined : this.described.find((d) => d.name === bare);
+  }
+
   private meaning(name: string): string {
-    const [bare = name, index] = name.split(/_(?=\d+$)/);
-    const found = this.described.find((d) => d.name === name || d.name === bare);
+    const [, index] = name.split(/_(?=\d+$)/);
+    const found = this.describedAs(name);
     const place = index === undefined ? '' : ` of ${found?.each ?? 'vessel'} ${index}`;
     return found ? `${found.meaning} (${name})${place}` : name;
   }
@@ -96,9 +107,22 @@ export class SheetBuilder {
         name,
         `The ${this.meaning(name)} is given in ${unitLabel(given.unit) || 'no unit'}; it must be in a unit such as ${unitLabel(unit) || 'a plain number'}.`,
       );
+    this.checkPlausible(name, given);
     const value = convert(given, unit);
     this.checkBounds(name, value, unit, bounds);
     return this.keep(name, value, tex);
+  }
+
+  /** Refuses what cannot be, and warns of what is unusual, by the range of the quantity that the input is. */
+  private checkPlausible(name: string, given: Q): void {
+    const key = this.describedAs(name)?.rangeKey;
+    if (key === undefined || standing(key, given) === 'possible') return;
+    const atmosphere = this.inputs['atmospheric_pressure'];
+    const barometer = typeof atmosphere === 'object' && dimensionOf(atmosphere.unit) === 'pressure-absolute';
+    const check = checkRange(key, given, barometer ? { barometer: atmosphere } : {}, this.meaning(name));
+    if (check.wrongUnit === true || check.sentence === undefined) return;
+    if (check.verdict === 'impossible') this.refuse('VALUE_IMPOSSIBLE', name, check.sentence);
+    this.warn('VALUE_UNUSUAL', check.sentence);
   }
 
   private checkBounds(name: string, value: number, unit: string, bounds: Bounds): void {

@@ -103,7 +103,7 @@ describe('refusals say what is wrong in a practitioner’s words', () => {
     expect(refusal({ W: { value: 3, unit: 'm3/h' } })).toMatchObject({ code: 'WRONG_UNIT', field: 'W' });
     expect(refusal({ P1: { value: 8, unit: 'bar' } })).toMatchObject({ code: 'WRONG_UNIT', field: 'P1' });
     expect(refusal({ k: { value: 0.9, unit: '-' } })?.text).toBe(
-      'The ideal-gas ratio of specific heats (k) is 0.9; it cannot be below 1.',
+      'Ideal-gas ratio of specific heats (k) 0.9 is impossible: it lies above 1 and up to 1.67.',
     );
     expect(refusal({ M: { value: -3, unit: 'kg/kmol' } })).toMatchObject({
       code: 'VALUE_IMPOSSIBLE',

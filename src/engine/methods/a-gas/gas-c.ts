@@ -14,7 +14,8 @@ export const GAS_C: Method = {
   editions: ['API 520-1, 7th to 10th edition'],
   source: 'API Standard 520 Part I, coefficient C; constants 520 (US) and 0.03948 (SI) from memory',
   validity: 'Ideal-gas k from 1 up; at k = 1 the limit is taken.',
-  inputs: [input('k', 'ideal-gas ratio of specific heats', 'dimensionless', { rangeKey: 'kIdeal' })],
+  // The published table runs beyond what a gas can be (k = 2), so the range of a gas is not asked of k here.
+  inputs: [input('k', 'ideal-gas ratio of specific heats', 'dimensionless')],
   outputs: [
     output('C_US', 'C in US units', 'gas-constant-c'),
     output('C_SI', 'C in SI units', 'gas-constant-c'),
