@@ -6,12 +6,13 @@ import aGas from './a-gas.json';
 import bSteam from './b-steam.json';
 import cLiquid from './c-liquid.json';
 import { disagreements, type ReferenceCase } from './compare';
+import dTwoPhase from './d-two-phase.json';
 import eFire from './e-fire.json';
 import fLoads from './f-loads.json';
 import hLimits from './h-limits.json';
 import iAreas from './i-areas.json';
 
-const FILES = { aGas, bSteam, cLiquid, eFire, fLoads, hLimits, iAreas };
+const FILES = { aGas, bSteam, cLiquid, dTwoPhase, eFire, fLoads, hLimits, iAreas };
 
 describe.each(Object.entries(FILES))('%s', (_file, { cases }) => {
   const all = cases as unknown as ReferenceCase[];

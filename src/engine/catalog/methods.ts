@@ -9,6 +9,7 @@ import { LIQUID_BACKPRESSURE } from '../methods/c-liquid/backpressure';
 import { LIQUID } from '../methods/c-liquid/liquid';
 import { LIQUID_NONCERTIFIED } from '../methods/c-liquid/noncertified';
 import { VISCOSITY_FACTOR } from '../methods/c-liquid/viscosity';
+import { TWO_PHASE_METHODS } from '../methods/d-two-phase';
 import { FIRE_SUPERCRITICAL } from '../methods/e-fire/supercritical';
 import { FIRE_UNWETTED } from '../methods/e-fire/unwetted';
 import { FIRE_INSULATION } from '../methods/e-fire/insulation';
@@ -39,6 +40,7 @@ export const METHODS: readonly Method[] = [
   LIQUID,
   LIQUID_NONCERTIFIED,
   VISCOSITY_FACTOR,
+  ...TWO_PHASE_METHODS,
   FIRE_INSULATION,
   FIRE_SUPERCRITICAL,
   FIRE_UNWETTED,
