@@ -14,6 +14,7 @@ import { fluidId } from './fluids';
 import { groupId } from './groups';
 import { idOf } from './ids';
 import { fireWettedInputs, vaporisationInputs, worksHere } from './methods';
+import { TANK_METHODS, tankInputs } from './tanks';
 
 /** An answer with the external sheets that it rests on. */
 export type Answered = { answer: Answer; sheets: ExternalSheet[] };
@@ -62,6 +63,7 @@ function stated(answer: DemoAnswer): Calc | undefined {
 function methodInputs(answer: DemoAnswer, system: DemoSystem): Record<string, Input> {
   if (answer.load.method === 'e.fire-wetted') return fireWettedInputs(answer);
   const inputs = inputsOf(answer.load, system);
+  if (answer.load.method in TANK_METHODS) return tankInputs(answer.load, inputs, system);
   return answer.load.method === 'x.heat-balance' ? vaporisationInputs(inputs) : inputs;
 }
 
@@ -69,7 +71,7 @@ function loadOf(answer: DemoAnswer, context: AnswerContext): { calc: Calc; sheet
   const theirs = answer.load.method;
   const given = theirs === 'x.stated-rate' || theirs === 'x.compressor-rate' ? stated(answer) : undefined;
   if (given) return { calc: given };
-  const method = theirs === 'x.heat-balance' ? 'f.vaporisation' : theirs;
+  const method = theirs === 'x.heat-balance' ? 'f.vaporisation' : (TANK_METHODS[theirs] ?? theirs);
   if (worksHere(method))
     return { calc: { by: 'method', method, inputs: methodInputs(answer, context.system) } };
   const sheet = externalSheet({
@@ -93,7 +95,8 @@ function sizeInputs(answer: DemoAnswer): Record<string, Input> {
 }
 
 function sizeOf(answer: DemoAnswer, context: AnswerContext): { calc: Calc; sheet?: ExternalSheet } {
-  const { method, inputs } = answer.sizing;
+  const { method: theirs, inputs } = answer.sizing;
+  const method = TANK_METHODS[theirs] ?? theirs;
   if (worksHere(method) && !method.startsWith('e.')) {
     const formula = inputs['Kv_formula'];
     const edition = formula === undefined ? {} : { edition: String(formula.value) };
@@ -103,7 +106,7 @@ function sizeOf(answer: DemoAnswer, context: AnswerContext): { calc: Calc; sheet
     about: 'size',
     scenario: context.scenario,
     group: answer.group,
-    method,
+    method: theirs,
     inputs: inputsOf(answer.sizing, context.system),
     result: context.result,
     study: context.study,

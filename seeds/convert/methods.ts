@@ -15,6 +15,11 @@ const CARRIED = new Set([
   'f.blocked-outlet',
   'f.thermal-expansion',
   'f.vaporisation',
+  'k.out-breathing',
+  'k.in-breathing',
+  'k.emergency-venting',
+  'k.blanket-regulator',
+  'k.vent-area',
 ]);
 
 /** True when the engine has the method and their inputs suffice for it. */

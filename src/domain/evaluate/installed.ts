@@ -9,9 +9,9 @@ export type AreaKind = 'effective' | 'actual';
 /** Installed area in m², and how many members offer it; `lacking` are the tags of members without an area of this kind. */
 export type Installed = { kind: AreaKind; m2: number; members: number; lacking: string[] };
 
-const ACTUAL_TOPICS = /^(external:)?(i\.iso|t\.|a\.rated)/;
+const ACTUAL_TOPICS = /^(external:)?(i\.iso|t\.|j\.|k\.|a\.rated)/;
 
-/** The kind of area that a size sheet ends in: topics a to d effective, unless a certified coefficient entered; topic i and tank vents actual. */
+/** The kind of area that a size sheet ends in: topics a to d effective, unless a certified coefficient entered; topics i to k actual. */
 export function areaKindOf(sheet: Sheet): AreaKind {
   const said = sheet.outputs['area_kind'];
   if (said === 'effective' || said === 'actual') return said;

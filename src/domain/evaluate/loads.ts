@@ -6,6 +6,7 @@ import { externalAsSheet, externalById } from './external';
 import { fillImplicit, loadValues } from './implicit';
 import { resolveInputs } from './inputs';
 import { missingSheet, outputOf, refusedSheet, statedSheet, workedSheet } from './sheets';
+import { isTankMethod, tankValues } from './tanks';
 import { type Sheet, type SheetKey } from './types';
 import { fillVessels } from './vessels';
 import { type CredibleAnswer, type Work } from './work';
@@ -72,7 +73,8 @@ function methodLoad(
   calc: Calc & { by: 'method' },
 ): Sheet {
   const resolved = resolveInputs(work, at, calc.inputs, (needed) => ensureLoad(work, needed));
-  const implicit = fillImplicit(calc.method, resolved, loadValues(work, ca, resolved));
+  const tank = isTankMethod(calc.method) ? tankValues(work, ca) : {};
+  const implicit = fillImplicit(calc.method, resolved, { ...loadValues(work, ca, resolved), ...tank });
   const made = fillVessels(work, ca, calc.method, resolved, implicit);
   const missing = resolved.missing[0];
   if (missing) return missingSheet(key, calc.method, made, missing);

@@ -9,6 +9,7 @@ import { fillImplicit, fluidOf, fluidValues, limitValues, type Values } from './
 import { areaKindOf, installedFor } from './installed';
 import { type Found, type Resolved, resolveInputs } from './inputs';
 import { missingSheet, outputOf, refusedSheet, statedSheet, workedSheet } from './sheets';
+import { isTankMethod, ventValues } from './tanks';
 import { type Sheet, type SheetKey } from './types';
 import { creditedMembers, type CredibleAnswer, type Work } from './work';
 
@@ -128,6 +129,7 @@ function sizeValues(
     balanced: () => balancedFlag(work, ca),
     P2: () => ({ value: fromSI(back.pa, work.basis.units === 'US' ? 'psia' : 'kPa_abs'), path: back.path }),
     back_pressure: () => backGauge(work, back),
+    ...(isTankMethod(method) ? ventValues(work, ca) : {}),
   };
   if ('KSH' in resolved.inputs) delete values['T'];
   return own && path !== undefined && !('KSH' in resolved.inputs)
