@@ -1,12 +1,12 @@
 /* A pure substance of the library as a source of properties. */
 import { type FluidState, type PhaseState, type PropertySource, type Saturation } from '../properties/types';
 import { type Mixture } from './cubic/mixture';
-import { evaluatePhase, newPhase, type Phase } from './cubic/phase';
+import { evaluatePhase } from './cubic/phase';
 import { molar, phaseState } from './cubic/state';
 import { newThermal, setTemperature } from './cubic/thermal';
 import { at } from './cubic/vector';
 import { type Held, phaseHolding } from './flash/one-phase';
-import { boilingAt, type Boiling } from './flash/pure';
+import { type Boiling, boilingAt, newBoiling } from './flash/pure';
 import { pressureInside, temperatureRange } from './range';
 
 /** The state that has a vapour share by mass `x` between two phases in equilibrium. */
@@ -16,24 +16,14 @@ function between(liquid: PhaseState, vapour: PhaseState, x: number): FluidState 
   return { P: liquid.P, T: liquid.T, rho: 1 / v, h: mean('h'), s: mean('s'), x };
 }
 
-function single(): Phase {
-  const phase = newPhase(1);
-  phase.x[0] = 1;
-  return phase;
-}
-
 /** The properties of a pure substance; `mixture` holds one component. Every answer outside its range is undefined. */
 export function pureFluid(mixture: Mixture, name: string, source: string): PropertySource {
   const t = newThermal(mixture);
   const M = at(mixture.M, 0);
   const critical = { P: at(mixture.Pc, 0), T: at(mixture.Tc, 0) };
   const { low, high } = temperatureRange(mixture);
-  const scratch = single();
-
-  const boiling = (P: number): Boiling | undefined => {
-    const found = boilingAt(mixture, t, P);
-    return found !== undefined && found.T > low ? found : undefined;
-  };
+  const scratch = newBoiling().vapour;
+  const boil = newBoiling();
 
   const atPT = (P: number, T: number): PhaseState | undefined => {
     if (!(pressureInside(P) && T >= low && T <= high)) return undefined;
@@ -42,11 +32,10 @@ export function pureFluid(mixture: Mixture, name: string, source: string): Prope
   };
 
   const saturation = (P: number): Saturation | undefined => {
-    const found = pressureInside(P) ? boiling(P) : undefined;
-    if (found === undefined) return undefined;
-    setTemperature(mixture, t, found.T);
-    const liquid = phaseState(mixture, t, found.liquid);
-    const vapour = phaseState(mixture, t, found.vapour);
+    if (!(pressureInside(P) && boilingAt(mixture, t, P, boil) && boil.T > low)) return undefined;
+    setTemperature(mixture, t, boil.T);
+    const liquid = phaseState(mixture, t, boil.liquid);
+    const vapour = phaseState(mixture, t, boil.vapour);
     return liquid && vapour ? { liquid, vapour } : undefined;
   };
 
@@ -59,10 +48,10 @@ export function pureFluid(mixture: Mixture, name: string, source: string): Prope
   const onePhase = (
     P: number,
     held: Held,
-    boil: Boiling | undefined,
+    from: Boiling | undefined,
     side: 'liquid' | 'vapour' | 'stable',
   ) => {
-    const start = boil?.T ?? critical.T;
+    const start = from?.T ?? critical.T;
     const span = { low: side === 'vapour' ? start : low, high: side === 'liquid' ? start : high, start };
     const T = phaseHolding(mixture, t, P, held, side, span, scratch);
     return T === undefined ? undefined : phaseState(mixture, t, scratch);
@@ -72,8 +61,7 @@ export function pureFluid(mixture: Mixture, name: string, source: string): Prope
     if (!(pressureInside(P) && Number.isFinite(perMass))) return undefined;
     const held: Held = { kind, value: perMass * M };
     if (P >= critical.P) return onePhase(P, held, undefined, 'stable');
-    const boil = boilingAt(mixture, t, P);
-    if (boil === undefined) return undefined;
+    if (!boilingAt(mixture, t, P, boil)) return undefined;
     // Below the range of the data there is no boiling, but there may still be gas.
     if (boil.T <= low) return onePhase(P, held, undefined, 'vapour');
     setTemperature(mixture, t, boil.T);
