@@ -7,6 +7,17 @@ import { type Inputs, type Refusal, type SheetWarning, type Step, type Worked } 
 /** How an input is described to the builder: name, meaning, of what it is given when numbered, and the range it keeps. */
 export type Described = { name: string; meaning: string; each?: string; rangeKey?: string };
 
+const named = new WeakMap<readonly Described[], ReadonlyMap<string, Described>>();
+
+/** Descriptions by name, put in order once for each method. */
+function byName(described: readonly Described[]): ReadonlyMap<string, Described> {
+  const known = named.get(described);
+  if (known) return known;
+  const made = new Map(described.map((one) => [one.name, one]));
+  named.set(described, made);
+  return made;
+}
+
 /** Ends the work of one sheet; caught by `workSheet`, never seen outside. */
 class Refused extends Error {
   constructor(readonly refusal: Refusal) {
@@ -38,10 +49,14 @@ export class SheetBuilder {
   readonly outputs: Inputs = {};
   private readonly symbols = new Map<string, { tex: string; value: number }>();
 
+  private readonly described: ReadonlyMap<string, Described>;
+
   constructor(
     readonly inputs: Inputs,
-    private readonly described: readonly Described[],
-  ) {}
+    described: readonly Described[],
+  ) {
+    this.described = byName(described);
+  }
 
   /** Stops the sheet with a sentence about one input. */
   refuse(code: string, field: string, text: string): never {
@@ -60,12 +75,7 @@ export class SheetBuilder {
 
   /** The description of an input; a numbered one (`D_2`) may be described by its bare name. */
   private describedAs(name: string): Described | undefined {
-    return this.described.find((d) => d.name === name) ?? this.describedBare(name);
-  }
-
-  private describedBare(name: string): Described | undefined {
-    const bare = name.replace(/_\d+$/, '');
-    return bare === name ? undefined : this.described.find((d) => d.name === bare);
+    return this.described.get(name) ?? this.described.get(name.replace(/_\d+$/, ''));
   }
 
   private meaning(name: string): string {
@@ -100,17 +110,21 @@ export class SheetBuilder {
   number(name: string, unit: string, bounds: Bounds = {}, tex?: string): number {
     if (!this.has(name) && bounds.fallback !== undefined) return this.keep(name, bounds.fallback, tex);
     const given = this.quantity(name);
-    const dimension = dimensionOf(given.unit);
-    if (dimension === undefined || dimension !== dimensionOf(unit))
-      this.refuse(
-        'WRONG_UNIT',
-        name,
-        `The ${this.meaning(name)} is given in ${unitLabel(given.unit) || 'no unit'}; it must be in a unit such as ${unitLabel(unit) || 'a plain number'}.`,
-      );
+    if (given.unit !== unit) this.checkUnit(name, given.unit, unit);
     this.checkPlausible(name, given);
     const value = convert(given, unit);
     this.checkBounds(name, value, unit, bounds);
     return this.keep(name, value, tex);
+  }
+
+  private checkUnit(name: string, from: string, to: string): void {
+    const dimension = dimensionOf(from);
+    if (dimension !== undefined && dimension === dimensionOf(to)) return;
+    this.refuse(
+      'WRONG_UNIT',
+      name,
+      `The ${this.meaning(name)} is given in ${unitLabel(from) || 'no unit'}; it must be in a unit such as ${unitLabel(to) || 'a plain number'}.`,
+    );
   }
 
   /** Refuses what cannot be, and warns of what is unusual, by the range of the quantity that the input is. */
@@ -125,27 +139,17 @@ export class SheetBuilder {
     this.warn('VALUE_UNUSUAL', check.sentence);
   }
 
-  private checkBounds(name: string, value: number, unit: string, bounds: Bounds): void {
-    const shown = `${texNumber(value).replace(/\\,/g, '\u2009')} ${unitLabel(unit)}`.trim();
-    const limit = (n: number) => `${n} ${unitLabel(unit)}`.trim();
-    if (bounds.above !== undefined && !(value > bounds.above))
-      this.refuse(
-        'VALUE_IMPOSSIBLE',
-        name,
-        `The ${this.meaning(name)} is ${shown}; it must be above ${limit(bounds.above)}.`,
-      );
-    if (bounds.min !== undefined && value < bounds.min)
-      this.refuse(
-        'VALUE_IMPOSSIBLE',
-        name,
-        `The ${this.meaning(name)} is ${shown}; it cannot be below ${limit(bounds.min)}.`,
-      );
-    if (bounds.max !== undefined && value > bounds.max)
-      this.refuse(
-        'VALUE_IMPOSSIBLE',
-        name,
-        `The ${this.meaning(name)} is ${shown}; it cannot be above ${limit(bounds.max)}.`,
-      );
+  private checkBounds(name: string, value: number, unit: string, { above, min, max }: Bounds): void {
+    if (above !== undefined && !(value > above)) this.beyond(name, value, unit, 'must be above', above);
+    if (min !== undefined && value < min) this.beyond(name, value, unit, 'cannot be below', min);
+    if (max !== undefined && value > max) this.beyond(name, value, unit, 'cannot be above', max);
+  }
+
+  private beyond(name: string, value: number, unit: string, relation: string, limit: number): never {
+    const label = unitLabel(unit);
+    const shown = `${texNumber(value).replace(/\\,/g, '\u2009')} ${label}`.trim();
+    const text = `The ${this.meaning(name)} is ${shown}; it ${relation} ${`${limit} ${label}`.trim()}.`;
+    this.refuse('VALUE_IMPOSSIBLE', name, text);
   }
 
   /** A word out of a list, or the fallback. */
@@ -167,27 +171,30 @@ export class SheetBuilder {
     return given;
   }
 
+  private readonly symbol: Show = (key) => this.symbols.get(key)?.tex ?? key;
+
+  private readonly figure: Show = (key) => {
+    const known = this.symbols.get(key);
+    return known === undefined ? key : `{${texNumber(known.value)}}`;
+  };
+
   /** Adds a step. The template is written once; symbols give the equation, numbers the substitution. */
   step(info: StepInfo, template: (v: Show) => string): number {
     const tex = info.tex ?? info.key;
     const { value, unit, meaning, clause, memory } = info;
     if (!Number.isFinite(value))
       this.refuse('NO_RESULT', info.key, `The ${meaning} has no finite value with these inputs; check them.`);
-    const symbol: Show = (key) => this.symbols.get(key)?.tex ?? key;
-    const figure: Show = (key) => {
-      const known = this.symbols.get(key);
-      return known === undefined ? key : `{${texNumber(known.value)}}`;
-    };
-    this.steps.push({
+    const step: Step = {
       symbol: tex,
       meaning,
-      tex: `${tex} = ${template(symbol)}`,
-      worked: `${tex} = ${template(figure)}`,
+      tex: `${tex} = ${template(this.symbol)}`,
+      worked: `${tex} = ${template(this.figure)}`,
       value,
       unit,
-      ...(clause === undefined ? {} : { clause }),
-      ...(memory === undefined ? {} : { memory }),
-    });
+    };
+    if (clause !== undefined) step.clause = clause;
+    if (memory !== undefined) step.memory = memory;
+    this.steps.push(step);
     return this.keep(info.key, value, tex);
   }
 
