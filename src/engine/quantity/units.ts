@@ -163,6 +163,7 @@ export const UNITS: Readonly<Record<string, Unit>> = {
   dB: u('sound-level', 1, 'dB'),
   deg: u('angle', Math.PI / 180, '°'),
   rpm: u('rotation', 1 / 60, 'rpm'),
+  Hz: u('rotation', 1, 'Hz'),
   '-': u('dimensionless', 1, ''),
   fraction: u('dimensionless', 1, ''),
   'fraction of gauge set pressure': u('dimensionless', 1, 'of set'),
