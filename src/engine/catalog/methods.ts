@@ -18,6 +18,23 @@ import { BLOCKED_OUTLET } from '../methods/f-loads/blocked-outlet';
 import { CHECK_VALVE } from '../methods/f-loads/check-valve';
 import { CONTROL_VALVE_GAS, GAS_BLOWBY } from '../methods/f-loads/control-valve-gas';
 import { CONTROL_VALVE_LIQUID } from '../methods/f-loads/control-valve-liquid';
+import { AIR_COOLER_FAILURE, LOSS_OF_COOLING } from '../methods/f-loads/loss-of-cooling';
+import { LOSS_OF_REFLUX } from '../methods/f-loads/loss-of-reflux';
+import { BLOCKED_IN_RISE } from '../methods/f-loads/blocked-in';
+import { BLOWBY_DISPLACEMENT } from '../methods/f-loads/blowby-displacement';
+import { CLEAN_EXCHANGER } from '../methods/f-loads/clean-exchanger';
+import { COMPRESSOR_CURVE } from '../methods/f-loads/compressor-curve';
+import { INADVERTENT_OPENING } from '../methods/f-loads/inadvertent';
+import { INFLOW_BALANCE } from '../methods/f-loads/inflow-balance';
+import { DISPLACEMENT, OVERFILLING } from '../methods/f-loads/overfilling';
+import { POOLED } from '../methods/f-loads/pooled';
+import { COMPRESSOR_RATE, POSITIVE_DISPLACEMENT, STATED_RATE } from '../methods/f-loads/rates';
+import { REACTION_GASSY } from '../methods/f-loads/reaction-gassy';
+import { REACTION_HEAT } from '../methods/f-loads/reaction-heat';
+import { REACTION_TEMPERED } from '../methods/f-loads/reaction-tempered';
+import { SETTLE_OUT } from '../methods/f-loads/settle-out';
+import { VACUUM_INFLOW } from '../methods/f-loads/vacuum-inflow';
+import { CONTROL_VALVE_BYPASS } from '../methods/f-loads/valve-bypass';
 import { THERMAL_EXPANSION } from '../methods/f-loads/thermal';
 import { TUBE_RUPTURE } from '../methods/f-loads/tube-rupture';
 import { VAPORISATION } from '../methods/f-loads/vaporisation';
@@ -53,6 +70,27 @@ export const METHODS: readonly Method[] = [
   THERMAL_EXPANSION,
   TUBE_RUPTURE,
   VAPORISATION,
+  COMPRESSOR_CURVE,
+  COMPRESSOR_RATE,
+  POSITIVE_DISPLACEMENT,
+  STATED_RATE,
+  INFLOW_BALANCE,
+  SETTLE_OUT,
+  INADVERTENT_OPENING,
+  CONTROL_VALVE_BYPASS,
+  BLOWBY_DISPLACEMENT,
+  DISPLACEMENT,
+  OVERFILLING,
+  LOSS_OF_COOLING,
+  AIR_COOLER_FAILURE,
+  LOSS_OF_REFLUX,
+  CLEAN_EXCHANGER,
+  REACTION_HEAT,
+  REACTION_TEMPERED,
+  REACTION_GASSY,
+  BLOCKED_IN_RISE,
+  VACUUM_INFLOW,
+  POOLED,
   ACCUMULATION,
   SET_TOLERANCE,
   LETTERS,

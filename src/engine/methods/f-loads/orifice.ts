@@ -14,6 +14,9 @@ export function liquidFlux(rho: number, drop: number): number {
 /** The phases of the fluid that leaks. */
 export const PHASES = ['liquid', 'gas'] as const;
 
+/** The phases of a break: a liquid may also flash on its way out. */
+export const BREAK_PHASES = ['liquid', 'gas', 'flashing'] as const;
+
 /** Inputs that describe the fluid on the high-pressure side. */
 export const HIGH_SIDE_INPUTS: readonly MethodInput[] = [
   optional('phase', 'phase of the fluid on the high-pressure side (liquid when not given)', undefined, {

@@ -41,7 +41,8 @@ function fromExchanger(sheet: SheetBuilder, system: System): number {
   );
 }
 
-function heatIn(sheet: SheetBuilder, system: System): number {
+/** Heat in, by duty or by UA and two temperatures; kept under the key `Qin`, in the system's unit. */
+export function heatIn(sheet: SheetBuilder, system: System): number {
   if (sheet.has('Q')) {
     const duty = sheet.number('Q', SYSTEM_UNITS[system].heat, { min: 0 }, 'Q_{in}');
     return sheet.keep('Qin', duty, 'Q_{in}');
