@@ -24,6 +24,15 @@ async function setPassword(trx: Db, personId: Id, passwordHash: string): Promise
   await trx('people').where({ id: personId }).update({ password_hash: passwordHash }).increment('version', 1);
 }
 
+/** Tells the trail of every site of a person what was done to their way in; never the secret itself. */
+async function tellSites(trx: Db, personId: Id, act: string): Promise<void> {
+  const sites = new Set((await people.rolesOf(trx, personId)).map((grant) => grant.siteId));
+  for (const siteId of sites) {
+    const entry = { siteId, at: nowInstant(), act, byId: personId, subject: personId, body: { changes: [] } };
+    await appendTrail(trx, { ...entry, hides: false });
+  }
+}
+
 /** Changes a person's own password; every other session of theirs ends. Gives how many ended. */
 export async function changePassword(
   auth: Auth,
@@ -38,6 +47,7 @@ export async function changePassword(
   const hashed = await hashPassword(asked.next);
   return transaction(auth.db, async (trx) => {
     await setPassword(trx, asked.personId, hashed);
+    await tellSites(trx, asked.personId, 'password.changed');
     return ok({ ended: await endSessionsOf(trx, asked.personId, asked.sessionId) });
   });
 }
@@ -70,6 +80,7 @@ export async function acceptToken(
   return transaction(auth.db, async (trx) => {
     if (!(await useToken(trx, row.hash, nowInstant()))) return stale;
     await setPassword(trx, person.id, hashed);
+    await tellSites(trx, person.id, row.kind === 'invite' ? 'invitation.accepted' : 'password.changed');
     await endSessionsOf(trx, person.id);
     return ok(person);
   });

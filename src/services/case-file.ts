@@ -15,6 +15,8 @@ import {
   agreementsOf,
   type AgreementRow,
   revealsOf,
+  type ViewRow,
+  viewsOf,
   type RevealRow,
   unseenOf,
   type UnseenWithFate,
@@ -62,6 +64,8 @@ export type CaseFile = {
   agreements: AgreementRow[];
   unseen: UnseenWithFate[];
   reveals: RevealRow[];
+  /** When the checkers of the case were first shown results of its documents. */
+  looks: ViewRow[];
   findings: FindingWithPosts[];
   due: DueRow[];
   lines: FieldLineRow[];
@@ -159,6 +163,12 @@ export async function loadCaseFile(db: Db, site: SiteRow, number: string): Promi
     agreements: await agreementsOf(db, row.id),
     unseen: await unseenOf(db, row.id),
     reveals: await revealsOf(db, row.id),
+    looks: await looksOf(
+      db,
+      row.id,
+      seats,
+      rows.map((one) => one.documentId),
+    ),
     findings,
     due,
     lines: await linesOf(db, row.id),
@@ -166,6 +176,17 @@ export async function loadCaseFile(db: Db, site: SiteRow, number: string): Promi
     discrepancies: await discrepanciesOf(db, row.id),
     people: new Map(people.map((person) => [person.id, person])),
   };
+}
+
+async function looksOf(
+  db: Db,
+  caseId: string,
+  seats: readonly SeatRow[],
+  documents: readonly string[],
+): Promise<ViewRow[]> {
+  const checkers = seats.filter((seat) => seat.role === 'checker' && !seat.untilAt);
+  const found = await Promise.all(checkers.map((seat) => viewsOf(db, seat.personId, documents)));
+  return found.flat().filter((view) => view.caseId === caseId);
 }
 
 /** Seats as the domain reads them. */

@@ -3,7 +3,6 @@ import { type GateFacts, type DocumentFacts, type Role } from '@domain/case';
 import { type Evaluation } from '@domain/evaluate';
 import { RULEBOOK } from '@domain/rulebook';
 import { type SiteRules } from '@domain/rules';
-import { viewsOf } from '@data/check';
 import { openCasesOf } from '@data/cases';
 import { type Db } from '@data/connection';
 import { peopleOfSite } from '@data/people';
@@ -91,14 +90,14 @@ function authorsOf(file: CaseFile): { person: string; document: string; sheet: s
   );
 }
 
-async function looks(db: Db, file: CaseFile): Promise<{ person: string; document: string; at: string }[]> {
-  const checkers = file.seats.filter((seat) => seat.role === 'checker' && !seat.untilAt);
-  const documents = file.documents.map((one) => one.document.id);
-  const found = await Promise.all(checkers.map((seat) => viewsOf(db, seat.personId, documents)));
-  return found
-    .flat()
-    .filter((view) => view.caseId === file.row.id)
-    .map((view) => ({ person: view.personId, document: view.documentId, at: view.at }));
+/** Who saw which results of this case, and who was let in by a reveal. */
+export function seenOf(file: CaseFile): Pick<GateFacts, 'views' | 'reveals'> {
+  const told = (one: { documentId: string; personId: string; at: string }) => ({
+    document: one.documentId,
+    person: one.personId,
+    at: one.at,
+  });
+  return { views: file.looks.map(told), reveals: file.reveals.map(told) };
 }
 
 /** Everything the gates of a case read, as of a day; `hidden` is whether the reader's view of this case is hidden. */
@@ -138,7 +137,6 @@ export async function gateFacts(db: Db, file: CaseFile, today: string, hidden: b
       at: one.at,
     })),
     unseen: unseenEntries(file),
-    reveals: file.reveals.map((one) => ({ document: one.documentId, person: one.personId, at: one.at })),
     findings: file.findings.map(findingAsDomain),
     dueItems: file.due.map(dueAsDomain),
     field: {
@@ -148,7 +146,7 @@ export async function gateFacts(db: Db, file: CaseFile, today: string, hidden: b
     },
     barometer: file.site.barometer,
     authors: authorsOf(file),
-    views: await looks(db, file),
+    ...seenOf(file),
     hidden,
   };
 }

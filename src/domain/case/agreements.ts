@@ -27,8 +27,15 @@ export function agreementOf(
   return given.length > 0 ? 'stale' : 'none';
 }
 
-/** Changed sheets that are not agreed as they stand. */
+/** Changed sheets that are not agreed as they stand. Which sheets moved is a result too: a hidden reader is told only that some wait. */
 export function agreementPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
+  const points = sheetPoints(of, facts);
+  if (!facts.hidden || points.length === 0) return points;
+  const sentence = `${of.tag}: the sheets that changed are agreed after the unseen check.`;
+  return [point('sheet-not-agreed', sentence, placeIn(facts, 'unseen', of))];
+}
+
+function sheetPoints(of: DocumentFacts, facts: GateFacts): OpenPoint[] {
   return changedSheets(of, facts.case.class === 'revalidation').flatMap((sheet) => {
     const state = agreementOf(of, sheet.key, facts);
     if (state === 'agreed') return [];

@@ -1,4 +1,5 @@
 /* Who may sit in which seat of a case: nobody judges what they made, at nomination and at every gate after it. */
+import { type GateFacts } from './gate-facts';
 import { type Id, type Role, type Seat, type SeatRole, type SheetKey } from './types';
 import { ROLE_WORDS } from './words';
 
@@ -77,4 +78,15 @@ export function conflictsOfSeat(person: Id, role: SeatRole, facts: IndependenceF
     { id: '', role, person },
   ];
   return conflictsOf({ ...facts, seats }).filter((conflict) => conflict.person === person);
+}
+
+/** People who saw originator's figures before they had entered anything themselves and before a reveal. */
+export function lookedFirst(facts: Pick<GateFacts, 'views' | 'reveals'>): string[] {
+  return facts.views
+    .filter((view) => {
+      const own = (each: { document: string; at: string }): boolean =>
+        each.document === view.document && each.at <= view.at;
+      return !facts.reveals.some((each) => each.person === view.person && own(each));
+    })
+    .map((view) => view.person);
 }

@@ -3,6 +3,7 @@ import {
   type ActBody,
   type DocumentFacts,
   type GateFacts,
+  lookedFirst,
   unseenDifferences,
   unseenState,
   type UnseenItem,
@@ -15,7 +16,7 @@ import { newId } from '@data/ids';
 import { type New } from '@data/mapping';
 import { type CaseFile } from '../case-file';
 import { type Actor, type Ctx, instant, today } from '../context';
-import { gateFacts } from '../gate-facts';
+import { gateFacts, seenOf } from '../gate-facts';
 import { type Write } from '../one-act';
 import { type Allowed, caseWrite } from './case-write';
 
@@ -28,9 +29,9 @@ function externalAuthors(file: CaseFile): string[] {
   );
 }
 
-/** Facts of the checker's acts: who wrote a sheet. Who looked first is refused at nomination. */
-export function checkerFacts(file: CaseFile): { authors: string[] } {
-  return { authors: externalAuthors(file) };
+/** Facts of the checker's acts: who wrote a sheet, and who saw the originator's figures first. */
+export function checkerFacts(file: CaseFile): { authors: string[]; lookedFirst: string[] } {
+  return { authors: externalAuthors(file), lookedFirst: lookedFirst(seenOf(file)) };
 }
 
 function itemOf(of: DocumentFacts, entry: Entry, facts: GateFacts): UnseenItem | undefined {

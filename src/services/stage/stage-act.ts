@@ -196,6 +196,14 @@ function whole(sent: SentStageRequest): Result<StageRequest> {
   });
 }
 
+const SIGNED_ALREADY =
+  'You have signed the approval as it stands. It waits for the other approvers; your signature falls when something signed is changed.';
+
+/** True when the approval carries the actor's valid signature already: one person signs once. */
+function hasSigned({ signatures }: StageWrite['facts'], actor: Actor): boolean {
+  return signatures.some((one) => one.gate === 'approval' && one.valid && one.person === actor.person.id);
+}
+
 /**
  * Does one act of the stage table. Refusals in the order of the model: unknown case, permission, independence, stage,
  * what was sent, version, gate, password and page. Nothing is written unless all of it is.
@@ -216,6 +224,7 @@ export async function stageAct(
   if (!request.ok) return request;
   if (file.row.version !== request.value.version) return stale(`Case ${file.row.number}`, file.row.version);
   const ready = await prepare(ctx, actor, file, request.value);
+  if (sent.act === 'SIGN' && hasSigned(ready.write.facts, actor)) return fail('WRONG_STAGE', SIGNED_ALREADY);
   if (ready.points.length > 0) return notOpen(ready.points);
   const signed = await passwordAndPage(
     auth,

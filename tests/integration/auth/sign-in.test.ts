@@ -3,6 +3,7 @@ import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import * as auth from '@auth/index';
 import { findAll } from '@data/mapping';
 import { findPerson, roleHistory, updatePerson } from '@data/people';
+import { TRAIL } from '@data/tables/outbox';
 import { SESSIONS } from '@data/tables/people';
 import { transaction } from '@data/connection';
 import { nowInstant } from '@data/ids';
@@ -171,6 +172,9 @@ describe('an account', () => {
     expect(await auth.whoAsks(context, two.header)).toBeNull();
     expect((await auth.signIn(context, EMAIL, PASSWORD, from)).ok).toBe(false);
     expect((await auth.signIn(context, EMAIL, 'a completely new one', from)).ok).toBe(true);
+    const told = await findAll(world.db, TRAIL, { act: 'password.changed' });
+    expect(told).toMatchObject([{ byId: world.people.originator, siteId: world.siteId }]);
+    expect(JSON.stringify(told)).not.toContain('completely');
   });
 
   test.each([

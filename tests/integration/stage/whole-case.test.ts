@@ -147,6 +147,10 @@ test('two approvers: the first leaves it in approval, the second sends it to the
   const two = { ...TEAM, approvers: ['Grace', 'Rufus'] };
   const number = await atApproval(site, two, impeller(205));
   expect(value(await act(site, number, 'SIGN', 'Grace')).stage).toBe('approval');
+  expect(await act(site, number, 'SIGN', 'Grace')).toMatchObject({
+    ok: false,
+    problem: { code: 'WRONG_STAGE', detail: expect.stringMatching(/^You have signed/) },
+  });
   expect(value(await act(site, number, 'SIGN', 'Rufus')).stage).toBe('field');
   const file = await fileOf(site, number);
   expect(file.signatures.filter((one) => one.gate === 'approval')).toHaveLength(2);

@@ -2,7 +2,7 @@
 import { daysBetween } from '@domain/dates';
 import { type OpenPoint } from '@domain/result';
 import { type GateFacts, nameOf, placeIn, point } from '../gate-facts';
-import { conflictsOf } from '../independence';
+import { conflictsOf, lookedFirst } from '../independence';
 import { lengthOf } from '../rich-text';
 import { SEAT_ROLES, type SeatRole } from '../types';
 
@@ -52,17 +52,6 @@ export function peoplePoints(facts: GateFacts): OpenPoint[] {
     names: facts.names,
   });
   return [...empty, ...conflicts.map((each) => point('people-not-independent', each.sentence, where))];
-}
-
-/** People who saw originator's figures before they had entered anything themselves and before a reveal. */
-export function lookedFirst(facts: Pick<GateFacts, 'views' | 'unseen' | 'reveals'>): string[] {
-  return facts.views
-    .filter((view) => {
-      const own = (each: { document: string; at: string }): boolean =>
-        each.document === view.document && each.at <= view.at;
-      return !facts.reveals.some((each) => each.person === view.person && own(each));
-    })
-    .map((view) => view.person);
 }
 
 function affected(facts: GateFacts): OpenPoint[] {

@@ -124,6 +124,10 @@ export function facts(over: Partial<GateFacts> = {}): GateFacts {
 export const codes = (gate: Gate, over: Partial<GateFacts>, document?: string): string[] =>
   openPoints(gate, facts(over), document).map((each) => each.code);
 
+/** What the open points of a gate say. */
+export const sentences = (gate: Gate, over: Partial<GateFacts>): string[] =>
+  openPoints(gate, facts(over)).map((each) => each.sentence);
+
 /** A signature of a gate, valid unless said otherwise. */
 export const signed = (
   gate: string,

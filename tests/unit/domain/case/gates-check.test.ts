@@ -1,7 +1,7 @@
 /* Gate of the calculation check: unseen check, agreements, findings, a basis that moved. */
 import { describe, expect, it } from 'vitest';
 import { type GateFacts, originatorsValue, type UnseenEntry, unseenState } from '@domain/case';
-import { aCase, codes, documentFacts, evaluation, q, says } from './fixture';
+import { aCase, codes, documentFacts, evaluation, q, says, sentences } from './fixture';
 
 const changed = documentFacts({ baseEvaluation: evaluation(1900, 'before') });
 /** Enters everything that is asked, as the originator has it, then reveals. */
@@ -96,5 +96,13 @@ describe('the gate of the calculation check', () => {
     expect(codes('check', { documents: [documentFacts({ inForce: 'rev9' })] })).toEqual(['basis-moved']);
     // A signed revision that waits to be installed is shown, it shuts nothing: approved in one order, installed in the other.
     expect(codes('check', { documents: [documentFacts({ pendingCase: 'KW-2026-001' })] })).toEqual([]);
+  });
+  it('tells a reader whose view is hidden that sheets wait, not which', () => {
+    const of = { ...worked(), agreements: [] };
+    const waiting = sentences('check', { ...of, hidden: true });
+    expect(waiting).toEqual([expect.stringMatching(/^SYS-1: the sheets that changed are agreed after/)]);
+    const named = sentences('check', of);
+    expect(named.length).toBeGreaterThan(0);
+    expect(named.filter((one) => waiting.includes(one))).toEqual([]);
   });
 });
