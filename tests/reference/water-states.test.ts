@@ -56,8 +56,9 @@ describe(table.source, () => {
       if (one.kind !== 'Px') expect(regionOf(got as FluidState)).toBe(region);
       const within = one.kind === 'PT' && region !== 3 ? DIRECT : ITERATED;
       for (const [name, value] of Object.entries(wanted)) {
-        const ours = (got as Row)[name];
-        if (ours === undefined) continue;
+        if (MORE.includes(name) && !hasMore(one)) continue;
+        if (name === 'mu' && one.state['T']! > 1173.15) continue;
+        const ours = (got as Row)[name]!;
         expect(Math.abs(ours - value) / (Math.abs(value) + (SCALE[name] ?? 0)), name).toBeLessThan(within);
       }
     },

@@ -12,5 +12,8 @@ export const CRITICAL = { P: 22.064e6, T: 647.096, rho: 322 } as const;
 /** Temperatures that bound the regions, K: the lowest, regions 1 | 3, the end of 2 | 3, regions 2 | 5, the highest. */
 export const LIMITS_T = { lowest: 273.15, one: 623.15, three: 863.15, two: 1073.15, five: 2273.15 } as const;
 
-/** Highest pressures, Pa: of regions 1, 2 and 3, and of region 5. */
-export const LIMITS_P = { most: 100e6, five: 50e6 } as const;
+/**
+ * Pressures that bound the formulation, Pa: of regions 1, 2 and 3, and of region 5. It reaches down to zero; below 1 Pa,
+ * where no relief system works, rounding would begin to show.
+ */
+export const LIMITS_P = { least: 1, most: 100e6, five: 50e6 } as const;

@@ -32,7 +32,7 @@ function atPx(P: number, x: number): FluidState | undefined {
 }
 
 function along(P: number, given: Given, value: number): FluidState | undefined {
-  if (!(P > 0 && P <= LIMITS_P.most && Number.isFinite(value))) return undefined;
+  if (!(P >= LIMITS_P.least && P <= LIMITS_P.most && Number.isFinite(value))) return undefined;
   const found = onIsobar(P, given, value);
   return typeof found === 'object' && isSound(found) ? found : undefined;
 }

@@ -3,9 +3,6 @@ import { type FluidState } from '../properties/types';
 import { CRITICAL, LIMITS_P, LIMITS_T } from './constants';
 import { onIsobar } from './isobar';
 
-/** The lowest pressure searched, Pa: steam below it is an ideal gas for every purpose here. */
-const LOWEST = 1;
-
 /** How far below 273.15 K the search may look on its way, K: near 0 °C the entropy of water is not monotone in pressure. */
 const MARGIN = 10;
 const MOST_STEPS = 120;
@@ -25,7 +22,7 @@ function newtonPressure(state: FluidState, h: number): number {
  */
 export function onIsentrope(h: number, s: number): FluidState | undefined {
   if (!Number.isFinite(h) || !Number.isFinite(s)) return undefined;
-  let lo = LOWEST;
+  let lo: number = LIMITS_P.least;
   let hi: number = LIMITS_P.most;
   let P = Math.sqrt(lo * hi);
   let best: FluidState | undefined;

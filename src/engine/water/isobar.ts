@@ -91,6 +91,11 @@ function solveLeg(
   return { P: state.P, T: state.T, rho: state.rho, h: state.h, s: state.s };
 }
 
+/** How far h in J/kg or s in J/(kg·K) may lie beyond the ends of an isobar and still count as the end. */
+function rounding(value: number): number {
+  return 1e-9 + 1e-12 * Math.abs(value);
+}
+
 /**
  * The state at P in Pa where h in J/kg or s in J/(kg·K) has the given value: found leg by leg, so that boiling needs no
  * iteration. Where two basic equations leave a gap on their common boundary (at most some 100 J/kg, far below their uncertainty), the
@@ -103,7 +108,7 @@ export function onIsobar(P: number, given: Given, value: number, coldest: number
   for (const leg of legs(P, coldest)) {
     const first = leg.at(leg.lo);
     if (value < first[given]) {
-      if (before === undefined) return 'below';
+      if (before === undefined) return first[given] - value <= rounding(value) ? plain(first) : 'below';
       const share = (value - before[given]) / (first[given] - before[given]);
       const state = blend(before, first, share);
       return boiled ? { ...state, x: share } : state;
@@ -115,7 +120,7 @@ export function onIsobar(P: number, given: Given, value: number, coldest: number
     before = last;
     boiled = leg.boils === true;
   }
-  return 'above';
+  return before !== undefined && value - before[given] <= rounding(value) ? plain(before) : 'above';
 }
 
 function plain({ P, T, rho, h, s }: FluidState): FluidState {

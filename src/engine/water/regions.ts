@@ -23,7 +23,7 @@ function isVapour(P: number, T: number): boolean {
  * of two regions it is the one of lower number.
  */
 export function regionAt(P: number, T: number): Region | undefined {
-  if (!(P > 0 && T >= LIMITS_T.lowest && T <= LIMITS_T.five)) return undefined;
+  if (!(P >= LIMITS_P.least && T >= LIMITS_T.lowest && T <= LIMITS_T.five)) return undefined;
   if (T > LIMITS_T.two) return P <= LIMITS_P.five ? 5 : undefined;
   if (P > LIMITS_P.most) return undefined;
   if (T > LIMITS_T.one) return T < LIMITS_T.three && P > boundaryPressure(T) ? 3 : 2;
