@@ -8,13 +8,31 @@ function canonicalNumber(value: number): string {
   return value === 0 ? '0' : String(value);
 }
 
+const quoted = new Map<string, string>();
+const KEYS_HELD = 4000;
+
+/** A key as it is written; keys are few and come again with every document. */
+function quotedKey(key: string): string {
+  const known = quoted.get(key);
+  if (known !== undefined) return known;
+  const made = JSON.stringify(key.normalize('NFC'));
+  if (quoted.size < KEYS_HELD) quoted.set(key, made);
+  return made;
+}
+
 function canonicalObject(value: Record<string, unknown>): string {
-  const parts: string[] = [];
+  let text = '';
   for (const key of Object.keys(value).sort()) {
     const field = value[key];
-    if (field !== undefined) parts.push(`${JSON.stringify(key.normalize('NFC'))}:${canonical(field)}`);
+    if (field !== undefined) text += `${text === '' ? '' : ','}${quotedKey(key)}:${canonical(field)}`;
   }
-  return `{${parts.join(',')}}`;
+  return `{${text}}`;
+}
+
+function canonicalList(value: readonly unknown[]): string {
+  let text = '';
+  for (let i = 0; i < value.length; i += 1) text += `${i === 0 ? '' : ','}${canonical(value[i])}`;
+  return `[${text}]`;
 }
 
 /**
@@ -26,7 +44,7 @@ export function canonical(value: unknown): string {
   if (typeof value === 'number') return canonicalNumber(value);
   if (typeof value === 'string') return JSON.stringify(value.normalize('NFC'));
   if (typeof value === 'boolean') return value ? 'true' : 'false';
-  if (Array.isArray(value)) return `[${value.map(canonical).join(',')}]`;
+  if (Array.isArray(value)) return canonicalList(value);
   if (typeof value === 'object') return canonicalObject(value as Record<string, unknown>);
   throw new TypeError(`a ${typeof value} has no canonical form`);
 }
