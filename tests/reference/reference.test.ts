@@ -9,10 +9,11 @@ import { disagreements, type ReferenceCase } from './compare';
 import dTwoPhase from './d-two-phase.json';
 import eFire from './e-fire.json';
 import fLoads from './f-loads.json';
+import gLines from './g-lines.json';
 import hLimits from './h-limits.json';
 import iAreas from './i-areas.json';
 
-const FILES = { aGas, bSteam, cLiquid, dTwoPhase, eFire, fLoads, hLimits, iAreas };
+const FILES = { aGas, bSteam, cLiquid, dTwoPhase, eFire, fLoads, gLines, hLimits, iAreas };
 
 describe.each(Object.entries(FILES))('%s', (_file, { cases }) => {
   const all = cases as unknown as ReferenceCase[];

@@ -38,6 +38,7 @@ import { CONTROL_VALVE_BYPASS } from '../methods/f-loads/valve-bypass';
 import { THERMAL_EXPANSION } from '../methods/f-loads/thermal';
 import { TUBE_RUPTURE } from '../methods/f-loads/tube-rupture';
 import { VAPORISATION } from '../methods/f-loads/vaporisation';
+import { LINE_METHODS } from '../methods/g-lines';
 import { ACCUMULATION } from '../methods/h-limits/accumulation';
 import { SET_TOLERANCE } from '../methods/h-limits/tolerance';
 import { ISO_GAS, ISO_LIQUID, ISO_STEAM } from '../methods/i-iso4126/iso';
@@ -91,6 +92,7 @@ export const METHODS: readonly Method[] = [
   BLOCKED_IN_RISE,
   VACUUM_INFLOW,
   POOLED,
+  ...LINE_METHODS,
   ACCUMULATION,
   SET_TOLERANCE,
   LETTERS,
