@@ -1,5 +1,6 @@
 /* A pure substance of the library as a source of properties. */
-import { type FluidState, type PhaseState, type PropertySource, type Saturation } from '../properties/types';
+import { type FluidState, type PhaseState, type Saturation } from '../properties/types';
+import { type CubicFluid, type Equilibrium } from './cubic-fluid';
 import { type Mixture } from './cubic/mixture';
 import { evaluatePhase } from './cubic/phase';
 import { molar, phaseState } from './cubic/state';
@@ -10,14 +11,14 @@ import { type Boiling, boilingAt, newBoiling } from './flash/pure';
 import { pressureInside, temperatureRange } from './range';
 
 /** The state that has a vapour share by mass `x` between two phases in equilibrium. */
-function between(liquid: PhaseState, vapour: PhaseState, x: number): FluidState {
+export function between(liquid: PhaseState, vapour: PhaseState, x: number): FluidState {
   const mean = (of: 'h' | 's') => liquid[of] + x * (vapour[of] - liquid[of]);
   const v = 1 / liquid.rho + x * (1 / vapour.rho - 1 / liquid.rho);
   return { P: liquid.P, T: liquid.T, rho: 1 / v, h: mean('h'), s: mean('s'), x };
 }
 
 /** The properties of a pure substance; `mixture` holds one component. Every answer outside its range is undefined. */
-export function pureFluid(mixture: Mixture, name: string, source: string): PropertySource {
+export function pureFluid(mixture: Mixture, name: string, source: string): CubicFluid {
   const t = newThermal(mixture);
   const M = at(mixture.M, 0);
   const critical = { P: at(mixture.Pc, 0), T: at(mixture.Tc, 0) };
@@ -73,12 +74,24 @@ export function pureFluid(mixture: Mixture, name: string, source: string): Prope
     return l && v && between(l, v, (held.value - liquid) / (vapour - liquid));
   };
 
+  const equilibrium = (P: number, T: number): Equilibrium | undefined => {
+    const state = atPT(P, T);
+    return state && { state };
+  };
+
   return {
     name,
     source,
     M,
     critical,
     pure: true,
+    mixture,
+    range: { low, high },
+    equilibrium,
+    boundary: (P) => {
+      const sat = saturation(P);
+      return sat && { T: sat.liquid.T, ...sat, x: [1], y: [1] };
+    },
     atPT,
     atPx,
     atPH: (P, h) => holding(P, 'h', h),
