@@ -53,34 +53,42 @@ function sideHead(heads: Heads, R: number, h: number): number {
   return integrate(density, 0, bend) + integrate(density, bend, Math.PI / 2);
 }
 
-function horizontalArea(v: Vessel, h: number): number {
+/** Wetted surface of the shell and of the heads, m²; of a sphere all is shell. */
+export type Wetted = { shell: number; heads: number };
+
+function horizontalArea(v: Vessel, h: number): Wetted {
   const R = v.D / 2;
-  const shell = 2 * R * Math.acos(1 - h / R) * v.L;
-  return shell + 2 * sideHead(v.heads, R, h);
+  return { shell: v.D * Math.acos(1 - h / R) * v.L, heads: 2 * sideHead(v.heads, R, h) };
 }
 
 /** Bottom head, shell and, where the liquid reaches it, top head. A flat bottom counts as exposed. */
-function verticalArea(v: Vessel, h: number): number {
-  if (h <= 0) return 0;
+function verticalArea(v: Vessel, h: number): Wetted {
+  if (h <= 0) return { shell: 0, heads: 0 };
   const R = v.D / 2;
   const b = headDepth(v.heads, v.D);
   const shell = Math.PI * v.D * Math.min(Math.max(h - b, 0), v.L);
-  if (v.heads === 'flat') return Math.PI * R * R * (h >= v.L ? 2 : 1) + shell;
+  if (v.heads === 'flat') return { shell, heads: Math.PI * R * R * (h >= v.L ? 2 : 1) };
   const whole = poleCap(R, b, b);
   const bottom = h >= b ? whole : poleCap(R, b, h);
   const above = h - b - v.L;
   const top = above <= 0 ? 0 : whole - poleCap(R, b, Math.max(0, b - above));
-  return bottom + shell + top;
+  return { shell, heads: bottom + top };
 }
 
 /**
- * Inside surface that is wetted up to the height `h` over the lowest inside point, m². `h` is held between 0 and the
- * vessel's height. Exact geometry (quadrature for heads); API 521 counts both heads of a horizontal vessel.
+ * Inside surface that is wetted up to the height `h` over the lowest inside point, m², shell and heads apart. `h` is held
+ * between 0 and the vessel's height. Exact geometry (quadrature for heads); API 521 counts both heads of a horizontal vessel.
  */
-export function wettedArea(v: Vessel, h: number): number {
+export function wettedParts(v: Vessel, h: number): Wetted {
   const height = Math.min(Math.max(h, 0), vesselHeight(v));
-  if (v.orientation === 'sphere') return Math.PI * v.D * height;
+  if (v.orientation === 'sphere') return { shell: Math.PI * v.D * height, heads: 0 };
   return v.orientation === 'horizontal' ? horizontalArea(v, height) : verticalArea(v, height);
+}
+
+/** Inside surface that is wetted up to the height `h`, m²: shell and heads together. */
+export function wettedArea(v: Vessel, h: number): number {
+  const { shell, heads } = wettedParts(v, h);
+  return shell + heads;
 }
 
 /**

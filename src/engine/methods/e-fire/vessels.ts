@@ -5,13 +5,14 @@ import { numbered } from '../common/numbered';
 import { SYSTEM_UNITS, type System } from '../common/system';
 import {
   effectiveHeight,
+  headDepth,
   HEADS,
   type Heads,
   ORIENTATIONS,
   type Orientation,
   type Vessel,
   vesselHeight,
-  wettedArea,
+  wettedParts,
 } from './geometry';
 
 const CLAUSE = 'API 521, effect of fire on the wetted surface';
@@ -89,29 +90,62 @@ function heightStep(
   );
 }
 
-/** Its wetted area. */
-function areaStep(
-  sheet: SheetBuilder,
-  n: number,
-  vessel: Vessel,
-  name: string,
-  area: number,
-  unit: string,
-): void {
+/** What the heads of a vessel add, in words a checker can rework; the surface of a curved head is found by quadrature. */
+const HEAD_SURFACE: Record<Heads, string> = {
+  ellipsoidal: 'wetted part of two 2:1 ellipsoidal heads, surface of revolution by quadrature',
+  hemispherical: 'wetted part of two hemispherical heads, surface of revolution by quadrature',
+  flat: 'wetted part of the flat ends',
+};
+
+type Part = { n: number; vessel: Vessel; name: string; height: number; system: System };
+
+/** Its wetted shell. */
+function shellStep(sheet: SheetBuilder, { n, vessel, name, system }: Part, shell: number): void {
+  const b = fromSI(headDepth(vessel.heads, vessel.D), SYSTEM_UNITS[system].L).value;
+  sheet.keep(`b_${n}`, b, `b_{${n}}`);
   sheet.step(
     {
-      key: `A_${n}`,
-      tex: `A_{${n}}`,
-      meaning: `wetted area of ${name}, ${shapeWords(vessel.orientation, vessel.heads)}`,
-      value: area,
-      unit,
-      clause: 'exact geometry of shell and heads',
+      key: `As_${n}`,
+      tex: `A_{s${n}}`,
+      meaning: `wetted shell of ${name}, ${shapeWords(vessel.orientation, vessel.heads)}`,
+      value: shell,
+      unit: SYSTEM_UNITS[system].area,
+      clause: 'exact geometry',
     },
-    (v) =>
-      vessel.orientation === 'sphere'
-        ? `\\pi \\cdot ${v(numbered('D', n))} \\cdot ${v(`he_${n}`)}`
-        : `A_{shell+heads}(${v(numbered('D', n))},\\ ${v(numbered('L', n))},\\ ${v(`he_${n}`)})`,
+    (v) => {
+      const [D, L, h] = [v(numbered('D', n)), v(numbered('L', n)), v(`he_${n}`)];
+      return vessel.orientation === 'horizontal'
+        ? `${D} \\cdot ${L} \\cdot \\arccos\\left(1 - \\frac{2 \\cdot ${h}}{${D}}\\right)`
+        : `\\pi \\cdot ${D} \\cdot \\min(\\max(0,\\ ${h} - ${v(`b_${n}`)}),\\ ${L})`;
+    },
   );
+}
+
+/** Its wetted area: the shell by its equation, the heads by theirs, and their sum. */
+function areaSteps(sheet: SheetBuilder, part: Part): number {
+  const { n, vessel, name, height, system } = part;
+  const unit = SYSTEM_UNITS[system].area;
+  const si = wettedParts(vessel, height);
+  const area = fromSI(si.shell + si.heads, unit).value;
+  const total = { key: `A_${n}`, tex: `A_{${n}}`, meaning: `wetted area of ${name}`, value: area, unit };
+  if (vessel.orientation === 'sphere')
+    return sheet.step(
+      { ...total, meaning: `wetted area of ${name}, sphere`, clause: 'exact geometry' },
+      (v) => `\\pi \\cdot ${v(numbered('D', n))} \\cdot ${v(`he_${n}`)}`,
+    );
+  shellStep(sheet, part, fromSI(si.shell, unit).value);
+  sheet.step(
+    {
+      key: `Ah_${n}`,
+      tex: `A_{h${n}}`,
+      meaning: `${HEAD_SURFACE[vessel.heads]} up to the wetted height`,
+      value: fromSI(si.heads, unit).value,
+      unit,
+      clause: 'exact geometry',
+    },
+    (v) => `A_{head}(${v(numbered('D', n))},\\ ${v(`he_${n}`)})`,
+  );
+  return sheet.step(total, (v) => `${v(`As_${n}`)} + ${v(`Ah_${n}`)}`);
 }
 
 /** The steps of one vessel; its wetted area in the system's unit. */
@@ -130,8 +164,7 @@ function vesselSteps(sheet: SheetBuilder, n: number, fireHeight: number, system:
   const si = effectiveHeight(vessel, { level, elevation, fireHeight });
   const height = fromSI(si, u.L).value;
   heightStep(sheet, n, vessel, name, height, u.L);
-  const area = fromSI(wettedArea(vessel, si), u.area).value;
-  areaStep(sheet, n, vessel, name, area, u.area);
+  const area = areaSteps(sheet, { n, vessel, name, height: si, system });
   sheet.output(n === 1 ? 'effective_wetted_height' : `effective_wetted_height_${n}`, height, u.L);
   sheet.output(`wetted_area_${n}`, area, u.area);
   if (si === 0 && level > 0)

@@ -78,7 +78,7 @@ function expansionSteps(sheet: SheetBuilder, r: Through, ratio: 'xT' | 'xTP'): v
   sheet.output('Y', r.Y);
 }
 
-/** The steps of one gas flow through a known coefficient; gives all outputs but the inverse. */
+/** The steps of one gas flow through a known coefficient, or through the one just found; gives all outputs but the inverse. */
 function flowSteps(
   sheet: SheetBuilder,
   gas: ValveGas,
@@ -143,19 +143,20 @@ function requiredSteps(
       'W',
       `No coefficient passes this flow with these fittings. ${search.reason}`,
     );
-  const { choked } = gasThrough(gas, search.x, type, fittings);
+  const tex = type === 'Kv' ? 'K_v' : 'C_v';
   sheet.step(
     {
-      key: 'K',
-      tex: type === 'Kv' ? 'K_v' : 'C_v',
-      meaning: 'coefficient that passes the flow, found by iteration',
+      key: 'coefficient',
+      tex,
+      meaning:
+        'coefficient that passes the flow, found by iteration; the lines below pass the flow through it',
       value: search.x,
       unit: type,
       clause: CLAUSE,
     },
-    (v) => `\\text{root of } W(C) = ${v('W')}`,
+    (v) => `\\text{root of } W(${tex}) = ${v('W')}`,
   );
-  sheet.output('choked', choked);
+  flowSteps(sheet, gas, search.x, type, fittings);
   sheet.output('Kv_required', type === 'Kv' ? search.x : search.x * 0.865, 'm3/h');
 }
 

@@ -138,20 +138,20 @@ function requiredSteps(
       'Q',
       `No coefficient passes this flow with these fittings. ${search.reason}`,
     );
-  const { FF, choked } = liquidThrough(liquid, search.x, type, fittings);
-  criticalStep(sheet, FF);
+  const tex = type === 'Kv' ? 'K_v' : 'C_v';
   sheet.step(
     {
-      key: 'K',
-      tex: type === 'Kv' ? 'K_v' : 'C_v',
-      meaning: 'coefficient that passes the flow, found by iteration',
+      key: 'coefficient',
+      tex,
+      meaning:
+        'coefficient that passes the flow, found by iteration; the lines below pass the flow through it',
       value: search.x,
       unit: type,
       clause: CLAUSE,
     },
-    (v) => `\\text{root of } Q(C) = ${v('Q')}`,
+    (v) => `\\text{root of } Q(${tex}) = ${v('Q')}`,
   );
-  sheet.output('choked', choked);
+  flowSteps(sheet, liquid, search.x, type, fittings);
   sheet.output('Kv_required', type === 'Kv' ? search.x : search.x * 0.865, 'm3/h');
 }
 
