@@ -24,10 +24,15 @@ export type GasFlow = {
   Kc: number;
 };
 
+/** base^exponent for base > 0: some times as fast as the operator, and as exact where the exponents are of order ten. */
+function power(base: number, exponent: number): number {
+  return Math.exp(exponent * Math.log(base));
+}
+
 /** √(k (2/(k+1))^((k+1)/(k−1))), with its limit √(1/e) at k = 1. k > 0. */
 export function nozzleFunction(k: number): number {
   if (Math.abs(k - 1) < 1e-6) return Math.sqrt(Math.exp(-1));
-  return Math.sqrt(k * (2 / (k + 1)) ** ((k + 1) / (k - 1)));
+  return Math.sqrt(k * power(2 / (k + 1), (k + 1) / (k - 1)));
 }
 
 /** The coefficient C of API 520-1 for an ideal-gas ratio of specific heats k, in the system's units. */
@@ -38,13 +43,16 @@ export function gasC(k: number, system: System): number {
 /** The critical pressure ratio (2/(k+1))^(k/(k−1)), with its limit 1/√e at k = 1. */
 export function criticalRatio(k: number): number {
   if (Math.abs(k - 1) < 1e-6) return Math.exp(-0.5);
-  return (2 / (k + 1)) ** (k / (k - 1));
+  return power(2 / (k + 1), k / (k - 1));
 }
 
 /** The coefficient of subcritical flow F2 at r = P2/P1, 0 < r < 1. */
 export function gasF2(k: number, r: number): number {
   if (Math.abs(k - 1) < 1e-6) return Math.sqrt((r ** 2 * -Math.log(r)) / (1 - r));
-  return Math.sqrt(((k / (k - 1)) * r ** (2 / k) * (1 - r ** ((k - 1) / k))) / (1 - r));
+  const log = Math.log(r);
+  // 1 − r^((k−1)/k) by expm1, which keeps its digits where k is near 1 or r near 1.
+  const expansion = -Math.expm1(((k - 1) / k) * log);
+  return Math.sqrt(((k / (k - 1)) * Math.exp((2 / k) * log) * expansion) / (1 - r));
 }
 
 /** Required effective area for critical flow, or for a balanced valve with its Kb (API 520-1), in mm² or in². */
