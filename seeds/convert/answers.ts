@@ -9,11 +9,12 @@ import {
 } from './demo-types';
 import { externalSheet } from './external';
 import { linked, linksOf } from './feeds';
-import { figureOf, inputOf } from './figures';
+import { inputOf } from './figures';
 import { fluidId } from './fluids';
 import { groupId } from './groups';
 import { idOf } from './ids';
-import { fireWettedInputs, vaporisationInputs, worksHere } from './methods';
+import { LOAD_METHODS, renamed } from './load-methods';
+import { fireUnwettedInputs, fireWettedInputs, worksHere } from './methods';
 import { TANK_METHODS, tankInputs } from './tanks';
 
 /** An answer with the external sheets that it rests on. */
@@ -53,25 +54,17 @@ function fluidOr(name: string, input: DemoInput): Input {
   return other && typeof input.value === 'string' ? { list: [fluidId(input.value)] } : inputOf(input);
 }
 
-/** A stated rate is given as it stands when its factor is one; its origin says where the rate comes from. */
-function stated(answer: DemoAnswer): Calc | undefined {
-  const { rate, factor } = answer.load.inputs;
-  if (rate === undefined || typeof rate.value !== 'number' || factor?.value !== 1) return undefined;
-  return { by: 'given', figure: figureOf({ ...rate, value: rate.value }) };
-}
-
 function methodInputs(answer: DemoAnswer, system: DemoSystem): Record<string, Input> {
   if (answer.load.method === 'e.fire-wetted') return fireWettedInputs(answer);
+  if (answer.load.method === 'e.fire-unwetted') return fireUnwettedInputs(answer);
   const inputs = inputsOf(answer.load, system);
   if (answer.load.method in TANK_METHODS) return tankInputs(answer.load, inputs, system);
-  return answer.load.method === 'x.heat-balance' ? vaporisationInputs(inputs) : inputs;
+  return renamed(answer.load.method, inputs);
 }
 
 function loadOf(answer: DemoAnswer, context: AnswerContext): { calc: Calc; sheet?: ExternalSheet } {
   const theirs = answer.load.method;
-  const given = theirs === 'x.stated-rate' || theirs === 'x.compressor-rate' ? stated(answer) : undefined;
-  if (given) return { calc: given };
-  const method = theirs === 'x.heat-balance' ? 'f.vaporisation' : (TANK_METHODS[theirs] ?? theirs);
+  const method = LOAD_METHODS[theirs] ?? TANK_METHODS[theirs] ?? theirs;
   if (worksHere(method))
     return { calc: { by: 'method', method, inputs: methodInputs(answer, context.system) } };
   const sheet = externalSheet({
@@ -86,9 +79,13 @@ function loadOf(answer: DemoAnswer, context: AnswerContext): { calc: Calc; sheet
   return { calc: { by: 'external', sheet: sheet.id }, sheet };
 }
 
-function sizeInputs(answer: DemoAnswer): Record<string, Input> {
-  const { Kd, KSH } = answer.sizing.inputs;
-  const known = Object.entries({ Kd, KSH }).flatMap(([name, input]) =>
+/** Entered coefficients; an area of ISO 4126-1 or of an unwetted fire takes the certified one of the devices where it is theirs. */
+function sizeInputs({ sizing }: DemoAnswer, system: DemoSystem): Record<string, Input> {
+  const { Kd, KSH } = sizing.inputs;
+  const certified = system.devices.some((device) => device.K_certified?.value === Kd?.value);
+  const actual = sizing.method.startsWith('i.') && !certified ? { Kdr: Kd } : {};
+  const coefficient = /^[ei]\./.test(sizing.method) ? actual : { Kd };
+  const known = Object.entries({ ...coefficient, KSH }).flatMap(([name, input]) =>
     input ? [[name, inputOf(input)]] : [],
   );
   return Object.fromEntries(known) as Record<string, Input>;
@@ -97,10 +94,10 @@ function sizeInputs(answer: DemoAnswer): Record<string, Input> {
 function sizeOf(answer: DemoAnswer, context: AnswerContext): { calc: Calc; sheet?: ExternalSheet } {
   const { method: theirs, inputs } = answer.sizing;
   const method = TANK_METHODS[theirs] ?? theirs;
-  if (worksHere(method) && !method.startsWith('e.')) {
+  if (worksHere(method)) {
     const formula = inputs['Kv_formula'];
     const edition = formula === undefined ? {} : { edition: String(formula.value) };
-    return { calc: { by: 'method', method, ...edition, inputs: sizeInputs(answer) } };
+    return { calc: { by: 'method', method, ...edition, inputs: sizeInputs(answer, context.system) } };
   }
   const sheet = externalSheet({
     about: 'size',

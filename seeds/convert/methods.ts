@@ -5,16 +5,30 @@ import { type DemoAnswer, type DemoInput } from './demo-types';
 import { inputOf } from './figures';
 import { fluidId } from './fluids';
 import { idOf } from './ids';
+import { renamed } from './load-methods';
 
 /** Methods for which the invented site's inputs suffice. */
 const CARRIED = new Set([
   'a.gas',
   'b.steam',
   'c.liquid',
+  'e.fire-unwetted',
   'e.fire-wetted',
   'f.blocked-outlet',
+  'f.check-valve-reverse-flow',
+  'f.compressor-rate',
+  'f.control-valve-gas',
+  'f.control-valve-liquid',
+  'f.gas-blowby',
+  'f.positive-displacement',
+  'f.reaction-heat',
+  'f.stated-rate',
   'f.thermal-expansion',
+  'f.tube-rupture',
   'f.vaporisation',
+  'i.iso4126-gas',
+  'i.iso4126-liquid',
+  'i.iso4126-steam',
   'k.out-breathing',
   'k.in-breathing',
   'k.emergency-venting',
@@ -41,9 +55,10 @@ const INSULATION: Record<string, string> = {
 };
 
 /** The n-th vessel's inputs, used from the document: bare names for the first, with _2, _3 … after it. */
-function vesselInputs(tag: string, n: number): [string, Input][] {
+function vesselInputs(tag: string, n: number, wetted: boolean): [string, Input][] {
   const suffix = n === 1 ? '' : `_${String(n)}`;
-  const used = Object.entries(VESSEL).map(([name, path]): [string, Input] => [
+  const fields = Object.entries(VESSEL).filter(([name]) => wetted || name !== 'liquid_level');
+  const used = fields.map(([name, path]): [string, Input] => [
     `${name}${suffix}`,
     { use: `equipment/${idOf('eq', tag)}/${path}` },
   ]);
@@ -66,23 +81,18 @@ export function fireWettedInputs(answer: DemoAnswer): Record<string, Input> {
     ? [['T_process', { use: `fluids/${fluidId(answer.fluid)}/T` }]]
     : [];
   return Object.fromEntries([
-    ...vesselsOf(vessels).flatMap((tag, n) => vesselInputs(tag, n + 1)),
+    ...vesselsOf(vessels).flatMap((tag, n) => vesselInputs(tag, n + 1, true)),
     ...stated,
     ...process,
   ]);
 }
 
-const VAPORISATION: Record<string, string> = {
-  UA: 'UA',
-  source_temperature: 'T_source',
-  sink_temperature: 'T_sink',
-  duty: 'Q',
-  heat_removed: 'Q_removed',
-};
-
-/** Inputs of the heat balance W = Q/λ under the engine's names; the latent heat is that of the fluid. */
-export function vaporisationInputs(inputs: Record<string, Input>): Record<string, Input> {
-  return Object.fromEntries(
-    Object.entries(inputs).map(([name, input]) => [VAPORISATION[name] ?? name, input]),
-  );
+/** Inputs of the fire on gas-filled vessels: each vessel named, then what the sheet states. */
+export function fireUnwettedInputs(answer: DemoAnswer): Record<string, Input> {
+  const { vessels, ...others } = answer.load.inputs;
+  const stated = Object.entries(others).map(([name, input]): [string, Input] => [name, inputOf(input)]);
+  return Object.fromEntries([
+    ...vesselsOf(vessels).flatMap((tag, n) => vesselInputs(tag, n + 1, false)),
+    ...Object.entries(renamed(answer.load.method, Object.fromEntries(stated))),
+  ]);
 }

@@ -10,7 +10,7 @@ import { outputOf } from './sheets';
 import { creditedMembers, type CredibleAnswer, type Work } from './work';
 
 /** Effective coefficients of API 520-1 (from memory of the standard), by topic. */
-const EFFECTIVE_KD: Record<string, number> = { a: 0.975, b: 0.975, c: 0.65, d: 0.85 };
+const EFFECTIVE_KD: Record<string, number> = { a: 0.975, b: 0.975, c: 0.65, d: 0.85, e: 0.975 };
 const NONCERTIFIED_KD = 0.62;
 
 type Coefficient = 'gas' | 'liquid' | 'kb' | 'kw' | 'kc';

@@ -1,6 +1,7 @@
 /* Inputs that need not be entered: taken from the limit sheet, the load sheet, the fluid, the group and its relief points. */
 import { type Fluid, type Path, getAt, isFigure, quantityOf } from '@domain/basis';
 import { methodById } from '@engine/catalog';
+import { fromSI, toSI } from '@engine/quantity';
 import { type Found, type Resolved } from './inputs';
 import { type Made, outputOf } from './sheets';
 import { type CredibleAnswer, type Work } from './work';
@@ -34,11 +35,28 @@ function figureOf(work: Work, path: Path): Found | undefined {
   return q && { value: q, path };
 }
 
+function isLiquid(fluid: Fluid): boolean {
+  return fluid.phase === 'liquid' || fluid.phase === 'flashing-liquid';
+}
+
+/** The vapour pressure that was entered first. */
+function vapourPressure(work: Work, fluid: Fluid): Found | undefined {
+  const first = fluid.psat?.[0];
+  return first && figureOf(work, `fluids/${fluid.id}/psat/${first.id}/p`);
+}
+
+/** The specific volume of a vapour as the reciprocal of its density. */
+function vapourVolume(fluid: Fluid): Found | undefined {
+  const rho = quantityOf(fluid.rhoVapour);
+  if (!rho || !(rho.value > 0)) return undefined;
+  return { value: fromSI(1 / toSI(rho), 'm3/kg'), path: `fluids/${fluid.id}/rhoVapour` };
+}
+
 /** The properties of a fluid by the names that methods use. */
 export function fluidValues(work: Work, fluid: Fluid | undefined): Values {
   if (!fluid) return {};
   const at = (field: keyof Fluid) => () => figureOf(work, `fluids/${fluid.id}/${field}`);
-  const liquid = fluid.phase === 'liquid' || fluid.phase === 'flashing-liquid';
+  const liquid = isLiquid(fluid);
   return {
     T: at('T'),
     T0: at('T'),
@@ -55,6 +73,10 @@ export function fluidValues(work: Work, fluid: Fluid | undefined): Values {
     v0: at('v0'),
     v9: at('v9'),
     G: at('relativeDensity'),
+    compressibility: at('compressibility'),
+    Pc: at('Pc'),
+    Pv: () => vapourPressure(work, fluid),
+    v: () => vapourVolume(fluid),
   };
 }
 
@@ -74,6 +96,15 @@ export function limitValues(work: Work, ca: CredibleAnswer): Values {
   };
 }
 
+/** The fluid on the other side, where a load names it; its density counts only when it comes in as a liquid. */
+function otherSide(work: Work, resolved: Resolved): Values {
+  const id = resolved.lists['upstream_fluid']?.[0] ?? resolved.lists['high_side_fluid']?.[0];
+  const other = id === undefined ? undefined : work.lookup.fluids.get(id);
+  const values = fluidValues(work, other);
+  if (other && !isLiquid(other)) delete values['rho'];
+  return values;
+}
+
 /** Inputs of load methods: fluid, limits, and the relieving pressure as the low side of what flows in. */
 export function loadValues(work: Work, ca: CredibleAnswer, resolved: Resolved): Values {
   const fluid = fluidOf(work, ca);
@@ -82,6 +113,15 @@ export function loadValues(work: Work, ca: CredibleAnswer, resolved: Resolved): 
     return q && { value: q, path: `sheets/limit:${ca.id}#P1` };
   };
   const sink: Values =
-    'UA' in resolved.inputs && fluid ? { T_sink: () => figureOf(work, `fluids/${fluid.id}/T`) } : {};
-  return { ...fluidValues(work, fluid), ...limitValues(work, ca), ...sink, P2: p1, P_low: p1 };
+    ('UA' in resolved.inputs || 'T_hot_in' in resolved.inputs) && fluid
+      ? { T_sink: () => figureOf(work, `fluids/${fluid.id}/T`) }
+      : {};
+  return {
+    ...fluidValues(work, fluid),
+    ...otherSide(work, resolved),
+    ...limitValues(work, ca),
+    ...sink,
+    P2: p1,
+    P_low: p1,
+  };
 }

@@ -129,12 +129,40 @@ function sizeValues(
     balanced: () => balancedFlag(work, ca),
     P2: () => ({ value: fromSI(back.pa, work.basis.units === 'US' ? 'psia' : 'kPa_abs'), path: back.path }),
     back_pressure: () => backGauge(work, back),
+    ...isoValues(work, ca, back),
+    ...exposedValues(work, ca),
     ...(isTankMethod(method) ? ventValues(work, ca) : {}),
   };
   if ('KSH' in resolved.inputs) delete values['T'];
   return own && path !== undefined && !('KSH' in resolved.inputs)
     ? { ...values, T: () => ({ value: own, path }) }
     : values;
+}
+
+/** Both pressures under the names of ISO 4126-1. */
+function isoValues(work: Work, ca: CredibleAnswer, back: BackPressure): Values {
+  const key = `limit:${ca.id}`;
+  const p0 = outputOf(work.sheets[key], 'P1');
+  return {
+    p0: () => p0 && { value: p0, path: `sheets/${key}#P1` },
+    pb: () => ({ value: fromSI(back.pa, 'bar_abs'), path: back.path }),
+  };
+}
+
+/** What the load sheet of a gas-filled vessel found of its surface and temperatures, for its area. */
+function exposedValues(work: Work, ca: CredibleAnswer): Values {
+  const key = `load:${ca.id}`;
+  const load = work.sheets[key];
+  const output = (name: string) => (): Found | undefined => {
+    const q = outputOf(load, name);
+    return q && { value: q, path: `sheets/${key}#${name}` };
+  };
+  const wall = load?.inputs['T_wall'];
+  return {
+    A_exposed: output('exposed_area'),
+    T1: output('T1'),
+    T_wall: () => (wall === undefined ? undefined : { value: wall, path: load?.from['T_wall'] ?? key }),
+  };
 }
 
 /** Whether the group's devices are balanced, so that their Kb and the critical equation hold in every regime. */

@@ -44,7 +44,7 @@ function entriesOf(equipment: Equipment): Entry[] {
   ];
 }
 
-/** Adds the vessels of a wetted-fire load: bare names for the first, `_2`, `_3` … for further ones; an entered input wins. */
+/** Adds the vessels of a fire load: bare names for the first, `_2`, `_3` … for further ones; an entered input wins. */
 export function fillVessels(
   work: Work,
   ca: CredibleAnswer,
@@ -52,7 +52,8 @@ export function fillVessels(
   resolved: Resolved,
   made: Made,
 ): Made {
-  if (!method.startsWith('e.fire-wetted')) return made;
+  const wetted = method.startsWith('e.fire-wetted');
+  if (!wetted && !method.startsWith('e.fire-unwetted')) return made;
   const filled: Made = { inputs: { ...made.inputs }, from: { ...made.from } };
   const add = (name: string, value: Value | undefined, path: Path) => {
     if (value === undefined || name in filled.inputs) return;
@@ -62,11 +63,12 @@ export function fillVessels(
   const vessels = exposedIds(ca, resolved).flatMap((id) => work.lookup.equipment.get(id) ?? []);
   vessels.forEach((equipment, index) => {
     for (const [name, value, field] of entriesOf(equipment)) {
+      if (name === 'liquid_level' && !wetted) continue;
       add(index === 0 ? name : `${name}_${String(index + 1)}`, value, `equipment/${equipment.id}/${field}`);
     }
   });
   const drained = vessels.length > 0 && vessels.every((equipment) => equipment.fire?.drainage === true);
-  add('adequate_drainage', drained, `equipment/${vessels[0]?.id ?? ''}/fire/drainage`);
+  if (wetted) add('adequate_drainage', drained, `equipment/${vessels[0]?.id ?? ''}/fire/drainage`);
   const height = work.rules.parameters['fireHeight'];
   if (typeof height === 'number' && height !== USUAL_FIRE_HEIGHT)
     add('fire_height', { value: height, unit: 'm' }, 'rules/fireHeight');

@@ -163,7 +163,7 @@ export const ISO_LIQUID: Method = {
   title: 'ISO 4126-1, liquid: required flow area',
   validity: 'Liquid that does not flash; actual flow area with the certified derated coefficient Kdr.',
   inputs: [
-    ...SHARED_INPUTS,
+    ...SHARED_INPUTS.map((one) => (one.name === 'Kdr' ? { ...one, rangeKey: 'kdLiquid' } : one)),
     input('rho', 'liquid density', 'density', { rangeKey: 'liquidDensity' }),
     optional('Kv', 'viscosity factor (1 when not given)', 'dimensionless', { rangeKey: 'kv' }),
   ],
