@@ -55,8 +55,7 @@ export function isothermalLine(
   gas: LineGas,
   end: number,
 ): IsothermalSegment[] {
-  const c2 = (gas.Z * GAS_CONSTANT * gas.T) / gas.M;
-  const c = Math.sqrt(c2);
+  const rT = (GAS_CONSTANT * gas.T) / gas.M;
   const perMach = 1 / Math.sqrt(gas.k);
   const worked: IsothermalSegment[] = new Array<IsothermalSegment>(segments.length);
   let behind = end;
@@ -64,8 +63,8 @@ export function isothermalLine(
   for (let i = segments.length - 1; i >= 0; i -= 1) {
     const segment = segments[i];
     if (!segment) break;
-    const G = fluxOf(segment);
-    const limit = G * c;
+    const c = Math.sqrt((segment.Z ?? gas.Z) * rT);
+    const limit = fluxOf(segment) * c;
     const reduces = next !== undefined && next.D < segment.D * (1 - 1e-9);
     const joined =
       reduces && next ? beforeReduction(behind, limit / behind, (fluxOf(next) * c) / behind) : behind;

@@ -49,10 +49,10 @@ export function isothermalProfile(
   each = 20,
 ): LinePoint[] {
   const worked = isothermalLine(segments, gas, end);
-  const r = (gas.Z * GAS_CONSTANT) / gas.M;
   return points(segments, each, (segment, index, left) => {
     const found = worked[index];
     if (!found) return undefined;
+    const r = ((segment.Z ?? gas.Z) * GAS_CONSTANT) / gas.M;
     const limit = fluxOf(segment) * Math.sqrt(r * gas.T);
     const P = found.outlet * isothermalRatio((limit / found.outlet) ** 2, segment.N * left);
     const rho = P / (r * gas.T);

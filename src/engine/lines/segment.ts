@@ -1,7 +1,10 @@
 /* What a stretch of pipe is to the bare arithmetic: one bore, its resistance in velocity heads, the flow it carries. */
 
-/** A stretch of one bore; D m, N = f L/D + ΣK (velocity heads, ≥ 0), W kg/s. Listed from the device to the end. */
-export type LineSegment = { D: number; N: number; W: number };
+/**
+ * A stretch of one bore; D m, N = f L/D + ΣK (velocity heads, ≥ 0), W kg/s. Listed from the device to the end. `Z` where the
+ * compressibility factor is another one than the gas has at the device.
+ */
+export type LineSegment = { D: number; N: number; W: number; Z?: number };
 
 /** A gas in a line: T K (stagnation temperature where flow is adiabatic), Z and k constant along the line, M kg/kmol. */
 export type LineGas = { T: number; Z: number; M: number; k: number };

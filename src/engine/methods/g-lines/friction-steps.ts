@@ -15,7 +15,7 @@ export function readFriction(
     return { f: readEach(sheet, 'f_darcy', count, { unit: '-', bounds, tex: 'f' }), Re: [] };
   }
   const rough = readEach(sheet, 'roughness', count, { unit: 'm', bounds: { min: 0 }, tex: '\\varepsilon' });
-  const mu = sheet.number('mu', 'Pa.s', { above: 0 }, '\\mu');
+  const mu = readEach(sheet, 'mu', count, { unit: 'Pa.s', bounds: { above: 0 }, tex: '\\mu' });
   const Re: number[] = [];
   const f = D.map((bore, i) => {
     if ((rough[i] ?? 0) >= bore)
@@ -24,7 +24,7 @@ export function readFriction(
         nameAt('roughness', i),
         'The roughness is as large as the bore; check its unit.',
       );
-    const Reynolds = reynolds(W[i] ?? 0, bore, mu);
+    const Reynolds = reynolds(W[i] ?? 0, bore, mu[i] ?? 1);
     Re.push(Reynolds);
     return frictionStep(sheet, i, count, Reynolds, (rough[i] ?? 0) / bore);
   });
@@ -40,7 +40,8 @@ function frictionStep(sheet: SheetBuilder, i: number, count: number, Re: number,
       value: Re,
       unit: '-',
     },
-    (v) => `\\frac{4 \\, ${v(nameAt('W', i))}}{\\pi \\cdot ${v(nameAt('D', i))} \\cdot ${v('mu')}}`,
+    (v) =>
+      `\\frac{4 \\, ${v(nameAt('W', i))}}{\\pi \\cdot ${v(nameAt('D', i))} \\cdot ${v(nameAt('mu', i))}}`,
   );
   const value = frictionFactor(Re, relative);
   const key = nameAt('f_darcy', i);

@@ -3,6 +3,8 @@ import { type Method } from '../../catalog/types';
 import { boreArea } from '../../lines';
 import { type SheetBuilder, workSheet } from '../../sheet';
 import { optional, output } from '../common/describe';
+import { GAS_CONSTANT } from '../a-gas/flow';
+import { absoluteIn } from '../common/pressures';
 import { adiabaticInlet } from './inlet-adiabatic';
 import { fractionOfSet, pressureOutput } from './pressures';
 import { FLOW_INPUTS, readSegments, SEGMENT_INPUTS } from './read';
@@ -42,9 +44,29 @@ function segmentLoss(
   return { loss, velocity };
 }
 
+/** The density as given, or of the gas at the pressure and temperature of the vessel. */
+function vesselDensity(sheet: SheetBuilder): number {
+  if (sheet.has('rho') || !sheet.has('P1')) return sheet.number('rho', 'kg/m3', { above: 0 }, '\\rho');
+  const P1 = absoluteIn(sheet, 'P1', 'P_1', 'kPa_abs');
+  const T = sheet.number('T0', 'K', { above: 0 }, 'T_0');
+  const Z = sheet.number('Z', '-', { above: 0 });
+  const M = sheet.number('M', 'kg/kmol', { above: 0 });
+  sheet.keep('R', GAS_CONSTANT, 'R');
+  return sheet.step(
+    {
+      key: 'rho',
+      tex: '\\rho',
+      meaning: 'density ahead of the line',
+      value: (P1 * 1e3 * M) / (Z * GAS_CONSTANT * T),
+      unit: 'kg/m3',
+    },
+    (v) => `\\frac{10^3 \\cdot ${v('P1')} \\cdot ${v('M')}}{${v('Z')} \\cdot ${v('R')} \\cdot ${v('T0')}}`,
+  );
+}
+
 /** The loss by incompressible flow at the density ahead of the line. */
 function incompressibleInlet(sheet: SheetBuilder): void {
-  const rho = sheet.number('rho', 'kg/m3', { above: 0 }, '\\rho');
+  const rho = vesselDensity(sheet);
   const { count, D, W, N, f, Re } = readSegments(sheet);
   const each = D.map((bore, i) => segmentLoss(sheet, i, count, { W: W[i] ?? 0, D: bore, N: N[i] ?? 0, rho }));
   const total = each.reduce((sum, one) => sum + one.loss, 0);
@@ -101,16 +123,17 @@ export const INLET_LOSS: Method = {
     ...FLOW_INPUTS,
     ...SEGMENT_INPUTS,
     optional('rho', 'density ahead of the line (incompressible form)', 'density'),
+    optional('P1', 'pressure in the vessel, from which the density of a gas follows', 'pressure-absolute'),
     optional('N', 'resistance in velocity heads, in place of lengths and fittings', 'dimensionless', {
       each: 'segment',
     }),
     optional('P0', 'pressure in the vessel (adiabatic form)', 'pressure-absolute'),
-    optional('T0', 'temperature in the vessel (adiabatic form)', 'temperature', {
+    optional('T0', 'temperature in the vessel', 'temperature', {
       rangeKey: 'relievingTemperature',
     }),
-    optional('Z', 'compressibility factor (adiabatic form)', 'dimensionless', { rangeKey: 'z' }),
-    optional('M', 'molar mass (adiabatic form)', 'molar-mass', { rangeKey: 'molarMass' }),
-    optional('k', 'ideal-gas ratio of specific heats (adiabatic form)', 'dimensionless', {
+    optional('Z', 'compressibility factor', 'dimensionless', { rangeKey: 'z' }),
+    optional('M', 'molar mass', 'molar-mass', { rangeKey: 'molarMass' }),
+    optional('k', 'ideal-gas ratio of specific heats', 'dimensionless', {
       rangeKey: 'kIdeal',
     }),
     optional('set_pressure', 'set pressure of the device', 'pressure-gauge', { rangeKey: 'setPressure' }),

@@ -3,11 +3,11 @@ import { type Method } from '../../catalog/types';
 import { boreArea, isothermalLine, type IsothermalSegment } from '../../lines';
 import { type SheetBuilder, workSheet } from '../../sheet';
 import { GAS_CONSTANT } from '../a-gas/flow';
-import { GAS_INPUTS, output } from '../common/describe';
+import { GAS_INPUTS, input, output } from '../common/describe';
 import { backPressureSteps, OUTLET_INPUTS, OUTLET_OUTPUTS, segmentOutputs, segmentPressures } from './outlet';
 import { endPressure } from './pressures';
 import { fluxStep, readSegments } from './read';
-import { ofSegment, symbolAt } from './series';
+import { nameAt, ofSegment, readEach, symbolAt } from './series';
 
 const CLAUSE = 'API 521, isothermal flow in outlet lines';
 
@@ -31,7 +31,7 @@ function segmentSteps(sheet: SheetBuilder, i: number, count: number, { found, k,
       unit: 'kPa_abs',
     },
     (v) =>
-      `10^{-3} \\cdot ${v(`G ${i}`)} \\sqrt{\\frac{${v('Z')} \\cdot ${v('R')} \\cdot ${v('T')}}{${v('M')}}}`,
+      `10^{-3} \\cdot ${v(`G ${i}`)} \\sqrt{\\frac{${v(nameAt('Z', i))} \\cdot ${v('R')} \\cdot ${v('T')}}{${v('M')}}}`,
   );
   sheet.step(
     { ...named('pout', 'p_{out}', 'static pressure at the end'), value: found.outlet / 1e3, unit: 'kPa_abs' },
@@ -48,7 +48,7 @@ function segmentSteps(sheet: SheetBuilder, i: number, count: number, { found, k,
       unit: 'kPa_abs',
     },
     (v) =>
-      `\\sqrt{${v(`pout ${i}`)}^2 + 10^{-6} \\cdot ${v(`G ${i}`)}^2 \\, \\frac{${v('Z')} \\cdot ${v('R')} \\cdot ${v('T')}}{${v('M')}} \\left(${v(`N ${i}`)} + 2 \\ln\\frac{${v(`pin ${i}`)}}{${v(`pout ${i}`)}}\\right)}`,
+      `\\sqrt{${v(`pout ${i}`)}^2 + 10^{-6} \\cdot ${v(`G ${i}`)}^2 \\, \\frac{${v(nameAt('Z', i))} \\cdot ${v('R')} \\cdot ${v('T')}}{${v('M')}} \\left(${v(`N ${i}`)} + 2 \\ln\\frac{${v(`pin ${i}`)}}{${v(`pout ${i}`)}}\\right)}`,
   );
   sheet.step(
     {
@@ -71,8 +71,15 @@ export const OUTLET_ISOTHERMAL: Method = {
   editions: ['API 521, 6th and 7th edition'],
   source: 'API Standard 521, isothermal flow equation (from memory); textbook gas dynamics',
   validity:
-    'Ideal gas with constant Z and constant temperature; Darcy friction factor; static pressure continuous at enlargements; no phase change in the line.',
-  inputs: [...OUTLET_INPUTS, ...GAS_INPUTS],
+    'Ideal gas at constant temperature, Z constant in each segment; Darcy friction factor; static pressure continuous at enlargements; no phase change in the line.',
+  inputs: [
+    ...OUTLET_INPUTS,
+    ...GAS_INPUTS.filter((one) => one.name !== 'Z'),
+    input('Z', 'compressibility factor, given once or for each segment', 'dimensionless', {
+      rangeKey: 'z',
+      each: 'segment',
+    }),
+  ],
   outputs: [
     ...segmentOutputs((s) => [
       output(
@@ -86,14 +93,14 @@ export const OUTLET_ISOTHERMAL: Method = {
   work(inputs, edition) {
     return workSheet(this, inputs, edition, (sheet) => {
       const T = sheet.number('T', 'K', { above: 0 });
-      const Z = sheet.number('Z', '-', { above: 0 });
       const M = sheet.number('M', 'kg/kmol', { above: 0 });
       const k = sheet.number('k', '-', { min: 1 });
       sheet.keep('R', GAS_CONSTANT, 'R');
       const end = endPressure(sheet);
       const { count, D, W, N } = readSegments(sheet);
-      const segments = D.map((bore, i) => ({ D: bore, W: W[i] ?? 0, N: N[i] ?? 0 }));
-      const worked = isothermalLine(segments, { T, Z, M, k }, end * 1e3);
+      const Z = readEach(sheet, 'Z', count, { unit: '-', bounds: { above: 0 }, tex: 'Z' });
+      const segments = D.map((bore, i) => ({ D: bore, W: W[i] ?? 0, N: N[i] ?? 0, Z: Z[i] ?? 1 }));
+      const worked = isothermalLine(segments, { T, Z: Z[0] ?? 1, M, k }, end * 1e3);
       for (let i = count - 1; i >= 0; i -= 1) {
         const found = worked[i];
         if (!found) continue;

@@ -2,6 +2,7 @@
 import { type MethodInput, type MethodOutput } from '../../catalog/types';
 import { type SheetBuilder } from '../../sheet';
 import { input, optional, output } from '../common/describe';
+import { absoluteIn } from '../common/pressures';
 import { fractionOfSet, pressureOutput } from './pressures';
 import { FLOW_INPUTS, SEGMENT_INPUTS } from './read';
 
@@ -10,6 +11,11 @@ export const OUTLET_INPUTS: readonly MethodInput[] = [
   ...FLOW_INPUTS,
   ...SEGMENT_INPUTS,
   input('P_exit_ambient', 'pressure beyond the end of the line', 'pressure-absolute'),
+  optional(
+    'P_superimposed',
+    'pressure at the outlet of the device before it opens (that beyond the end when not given)',
+    'pressure-absolute',
+  ),
   optional('set_pressure', 'set pressure of the device', 'pressure-gauge', { rangeKey: 'setPressure' }),
   optional('atmospheric_pressure', 'barometric pressure', 'pressure-absolute', { rangeKey: 'barometer' }),
 ];
@@ -51,18 +57,20 @@ export function segmentPressures(
 /** What a worked line comes to; pressures kPa, Mach by the adiabatic speed of sound. */
 export type LineEnd = { inlet: number; end: number; mach: number; chokes: boolean };
 
-/** The built-up back pressure from the symbol `inlet` of the first segment to that beyond the end. */
+/** The back pressure at the device, what of it the flow built up, and the highest Mach number. */
 export function backPressureSteps(sheet: SheetBuilder, { inlet, end, mach, chokes }: LineEnd): void {
   sheet.keep('p device', inlet, 'p_{in,1}');
+  const given = sheet.has('P_superimposed');
+  const before = given ? absoluteIn(sheet, 'P_superimposed', 'p_{si}', 'kPa_abs') : end;
   const built = sheet.step(
     {
       key: 'built-up',
       tex: '\\Delta p_{bu}',
       meaning: 'built-up back pressure',
-      value: inlet - end,
+      value: inlet - before,
       unit: 'kPa',
     },
-    (v) => `${v('p device')} - ${v('P_exit_ambient')}`,
+    (v) => `${v('p device')} - ${v(given ? 'P_superimposed' : 'P_exit_ambient')}`,
   );
   pressureOutput(sheet, 'total_back_pressure', inlet, 'absolute');
   pressureOutput(sheet, 'built_up_back_pressure', built, 'difference');

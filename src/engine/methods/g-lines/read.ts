@@ -16,7 +16,7 @@ export const SEGMENT_INPUTS: readonly MethodInput[] = [
     rangeKey: 'roughness',
     each: 'segment',
   }),
-  optional('mu', 'viscosity, with the roughness', 'viscosity'),
+  optional('mu', 'viscosity, with the roughness', 'viscosity', { each: 'segment' }),
 ];
 
 /** The flow of each segment: given once for all, or one each where lines join. */
