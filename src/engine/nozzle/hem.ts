@@ -20,8 +20,8 @@ const MAX_STRETCHES = 4;
 
 type Side = 'liquid' | 'vapour';
 
-/** The state at P on the inlet's isentrope. */
-function onPath(source: PropertySource, inlet: FluidState, P: number): PathState | undefined {
+/** The state at P (Pa) on the isentrope of an inlet at rest, with velocity and flux; undefined outside the formulation. */
+export function pathState(source: PropertySource, inlet: FluidState, P: number): PathState | undefined {
   const state = P === inlet.P ? inlet : source.atPS(P, inlet.s);
   return state && moving(inlet, state);
 }
@@ -108,7 +108,7 @@ function stretch(
   const flux = (y: number): number | undefined => {
     const known = seen.get(y);
     if (known) return known.flux;
-    const state = onPath(source, inlet, y === end ? Pb : start.P * Math.exp(-y));
+    const state = pathState(source, inlet, y === end ? Pb : start.P * Math.exp(-y));
     if (!state) return undefined;
     if (start.x === undefined && isTwoPhase(state) && !ahead) {
       const above = [...seen.values()].map((one) => one.P).filter((P) => P > state.P);

@@ -65,6 +65,22 @@ function fromStart(
   return value <= start.f ? start : refine(f, [start, { y, f: value }, lower], tolerance);
 }
 
+/** The end of the way, unless the function falls just ahead of it: then the maximum lies between the last two points. */
+function atEnd(
+  f: (y: number) => number | undefined,
+  before: Point,
+  end: Point,
+  tolerance: number,
+): Peak | undefined {
+  const y = end.y - tolerance;
+  if (y <= before.y) return { ...end, inside: false };
+  const value = f(y);
+  if (value === undefined) return undefined;
+  if (value <= end.f) return { ...end, inside: false };
+  const found = refine(f, [before, { y, f: value }, end], tolerance);
+  return found && { ...found, inside: true };
+}
+
 /**
  * The first maximum of `f` on [0, end], met with growing steps from 0 (where f is `first`); when f does not fall, its value
  * at the end. Undefined where f has no value. `tolerance` is on y.
@@ -76,7 +92,8 @@ export function firstMaximum(
 ): Peak | undefined {
   let before: Point = { y: 0, f: options.first };
   let here = before;
-  let step = Math.min(options.step, end / 2);
+  // On a way shorter than the tolerance only rounding could rise and fall: it is taken in one step.
+  let step = end <= options.tolerance ? end : Math.min(options.step, end / 2);
   while (here.y < end) {
     const y = here.y + 1.5 * step >= end ? end : here.y + step;
     const value = f(y);
@@ -92,6 +109,5 @@ export function firstMaximum(
     [before, here] = [here, next];
     step *= 2;
   }
-  const { y, f: value } = here;
-  return { y, f: value, inside: false };
+  return atEnd(f, before, here, options.tolerance);
 }

@@ -43,14 +43,29 @@ function givenRows(sheet: SheetBuilder): Row[] {
 
 type Columns = { pressure: string; other: string };
 
+/** The unit in a heading: "kPa_abs", "P (kPa_abs)", "P [bara]", "v / m3/kg", "rho in kg/m3". */
+function unitOfHeading(heading: string): string {
+  const pieces = [
+    heading,
+    /[([](.*)[)\]]\s*$/.exec(heading)?.[1],
+    /(?:\s\/\s|\sin\s|,\s)(.*)$/.exec(heading)?.[1],
+    /(\S+)\s*$/.exec(heading)?.[1],
+  ];
+  for (const piece of pieces) {
+    const unit = piece === undefined ? undefined : unitFromWords(piece.trim());
+    if (unit !== undefined) return unit;
+  }
+  return heading;
+}
+
 /** The units named in the line above the rows. */
 function columnUnits(sheet: SheetBuilder, head: string): Columns {
   const cells = head
-    .split(/[\t;|]+|\s{2,}|,\s/)
-    .map((cell) => cell.replace(/^.*[([](.*)[)\]]\s*$/, '$1').trim())
+    .split(/[\t;|]+|\s{2,}/)
+    .map((cell) => cell.trim())
     .filter(Boolean);
-  const words = cells.length >= 2 ? cells : head.trim().split(/\s+/);
-  const [pressure, other] = words.slice(0, 2).map((word) => unitFromWords(word) ?? word);
+  const words = cells.length >= 2 ? cells : head.trim().split(/[\s,]+/);
+  const [pressure, other] = words.slice(0, 2).map(unitOfHeading);
   const dimension = other === undefined ? undefined : dimensionOf(other);
   if (pressure === undefined || dimensionOf(pressure) !== 'pressure-absolute')
     sheet.refuse(

@@ -1,6 +1,9 @@
 /* Where the two-phase methods become doubtful, said on the sheet in words. */
 import { type MethodInput } from '../../catalog/types';
 import { convert } from '../../quantity';
+import { type Throat } from '../../nozzle/hem';
+import { type Inlet } from '../../nozzle/inlet';
+import { type PropertySource } from '../../properties/types';
 import { type SheetBuilder } from '../../sheet';
 import { optional } from '../common/describe';
 
@@ -72,6 +75,35 @@ export function warnDoubts(sheet: SheetBuilder, inlet: { P0: number; T0?: number
       );
   }
   warnShortNozzle(sheet);
+}
+
+/** How near to the critical point a cubic equation is not to be trusted, in reduced temperature and pressure: common practice, no source. */
+const CRITICAL_REGION = { T: [0.97, 1.1], P: [0.8, 1.5] } as const;
+
+const within = (value: number, [low, high]: readonly [number, number]): boolean =>
+  value >= low && value <= high;
+
+/** Warns of the critical region, of a short nozzle where liquid flashes, and of a flash that only begins at the throat. */
+export function warnIntegration(
+  sheet: SheetBuilder,
+  source: PropertySource,
+  inlet: Inlet,
+  throat: Throat,
+): void {
+  const { T, P } = { T: inlet.state.T / source.critical.T, P: inlet.state.P / source.critical.P };
+  if (within(T, CRITICAL_REGION.T) && within(P, CRITICAL_REGION.P))
+    sheet.warn(
+      'CRITICAL_REGION',
+      `The inlet is at ${T.toFixed(2)} of the critical temperature and ${P.toFixed(2)} of the critical pressure: densities and speed of sound change steeply there, and an equation of state with three constants is off by several per cent. Check with a reference equation.`,
+      'outside 0.97 to 1.1 of Tc together with 0.8 to 1.5 of Pc',
+    );
+  const flashes = inlet.phase.includes('liquid') || inlet.phase === 'two-phase';
+  if (flashes) warnShortNozzle(sheet);
+  if (inlet.phase === 'subcooled liquid' && throat.choked && !throat.atOnset)
+    sheet.warn(
+      'LOW_SUBCOOLING',
+      'The liquid is only just subcooled and flashes ahead of the throat: the flux changes steeply with the inlet temperature here. Work the sheet also with the highest temperature that is possible.',
+    );
 }
 
 /** A figure of the sheet in coherent SI. */
