@@ -43,6 +43,7 @@ import { ACCUMULATION } from '../methods/h-limits/accumulation';
 import { SET_TOLERANCE } from '../methods/h-limits/tolerance';
 import { ISO_GAS, ISO_LIQUID, ISO_STEAM } from '../methods/i-iso4126/iso';
 import { LETTERS } from '../methods/i-letters/letter-method';
+import { DEVICE_METHODS } from '../methods/j-devices';
 import { TANK_METHODS } from '../methods/k-tanks';
 import { type Method } from './types';
 
@@ -99,5 +100,6 @@ export const METHODS: readonly Method[] = [
   ISO_GAS,
   ISO_STEAM,
   ISO_LIQUID,
+  ...DEVICE_METHODS,
   ...TANK_METHODS,
 ];

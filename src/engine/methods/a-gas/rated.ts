@@ -13,7 +13,7 @@ export function ratedCapacity(flux: number, area: number, K: number): number {
 }
 
 /** The gas at the nozzle in SI base units; refuses when nothing can flow. */
-function readState(sheet: SheetBuilder, system: System): GasState {
+export function readState(sheet: SheetBuilder, system: System): GasState {
   const unit = SYSTEM_UNITS[system].P;
   const T = sheet.number('T', 'K', { above: 0 });
   const Z = sheet.number('Z', '-', { above: 0 });
@@ -34,7 +34,7 @@ function readState(sheet: SheetBuilder, system: System): GasState {
 }
 
 /** The step of the theoretical mass flux. */
-function fluxStep(sheet: SheetBuilder, state: GasState): { flux: number; choked: boolean } {
+export function fluxStep(sheet: SheetBuilder, state: GasState): { flux: number; choked: boolean } {
   const { flux, choked } = nozzleFlux(state);
   sheet.keep('P1', state.P1, 'P_1');
   sheet.keep('P2', state.P2, 'P_2');
@@ -79,6 +79,9 @@ export const RATED: Method = {
     }),
     optional('atmospheric_pressure', 'barometric pressure', 'pressure-absolute', { rangeKey: 'barometer' }),
     optional('P2', 'total back pressure (the barometric pressure when not given)', 'pressure-absolute'),
+    optional('Kc', 'combination factor with a rupture disk (1 when not given)', 'dimensionless', {
+      rangeKey: 'kc',
+    }),
   ],
   outputs: [
     output('P1', 'relieving pressure', 'pressure-absolute'),
@@ -92,12 +95,13 @@ export const RATED: Method = {
       const u = SYSTEM_UNITS[system];
       const A = sheet.number('A_actual', 'm2', { above: 0 }, 'A');
       const K = sheet.number('K_certified', '-', { above: 0, max: 1 }, 'K');
+      const Kc = sheet.number('Kc', '-', { above: 0, max: 1, fallback: 1 }, 'K_c');
       const { flux, choked } = fluxStep(sheet, readState(sheet, system));
-      const W = fromSI(ratedCapacity(flux, A, K), u.W).value;
+      const W = fromSI(ratedCapacity(flux, A, K * Kc), u.W).value;
       sheet.step(
         { key: 'W', tex: 'W_{rated}', meaning: 'rated capacity', value: W, unit: u.W },
         (v) =>
-          `${v('K_certified')} \\cdot ${v('A_actual')} \\cdot ${v('G')} \\quad (\\text{kg/s, shown as } ${unitLabel(u.W)})`,
+          `${v('K_certified')} \\cdot ${v('A_actual')} \\cdot ${v('Kc')} \\cdot ${v('G')} \\quad (\\text{kg/s, shown as } ${unitLabel(u.W)})`,
       );
       sheet.output('choked', choked);
       sheet.output('mass_flux_theoretical', flux, 'kg/(m2.s)');
