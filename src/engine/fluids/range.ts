@@ -6,7 +6,7 @@ import { at } from './cubic/vector';
 export const P_LIMIT = 1e8;
 
 /** The share of the lowest temperature of a heat capacity fit down to which its value is held. */
-const HELD = 0.7;
+const HELD = 0.55;
 
 /** Lowest and highest temperature, K: where the heat capacity of every substance present (more than a trace) is known. */
 export function temperatureRange({ n, z, cp }: Mixture): { low: number; high: number } {
