@@ -4,6 +4,7 @@ import { calculate } from '../../src/engine/calc';
 import { methodById } from '../../src/engine/catalog';
 import aGas from './a-gas.json';
 import bSteam from './b-steam.json';
+import bWater from './b-water.json';
 import cLiquid from './c-liquid.json';
 import { disagreements, type ReferenceCase } from './compare';
 import dTwoPhase from './d-two-phase.json';
@@ -13,7 +14,7 @@ import gLines from './g-lines.json';
 import hLimits from './h-limits.json';
 import iAreas from './i-areas.json';
 
-const FILES = { aGas, bSteam, cLiquid, dTwoPhase, eFire, fLoads, gLines, hLimits, iAreas };
+const FILES = { aGas, bSteam, bWater, cLiquid, dTwoPhase, eFire, fLoads, gLines, hLimits, iAreas };
 
 describe.each(Object.entries(FILES))('%s', (_file, { cases }) => {
   const all = cases as unknown as ReferenceCase[];

@@ -5,6 +5,7 @@ import { GAS_C } from '../methods/a-gas/gas-c';
 import { RATED } from '../methods/a-gas/rated';
 import { STEAM_KSH } from '../methods/b-steam/ksh';
 import { STEAM } from '../methods/b-steam/steam';
+import { WATER_PROPERTIES } from '../methods/b-steam/water-properties';
 import { LIQUID_BACKPRESSURE } from '../methods/c-liquid/backpressure';
 import { LIQUID } from '../methods/c-liquid/liquid';
 import { LIQUID_NONCERTIFIED } from '../methods/c-liquid/noncertified';
@@ -55,6 +56,7 @@ export const METHODS: readonly Method[] = [
   RATED,
   STEAM,
   STEAM_KSH,
+  WATER_PROPERTIES,
   LIQUID_BACKPRESSURE,
   LIQUID,
   LIQUID_NONCERTIFIED,

@@ -8,6 +8,7 @@ import { dimensionOf, type Q, UNITS } from '../../../src/engine/quantity';
 import { type Inputs } from '../../../src/engine/sheet';
 import aGas from '../../reference/a-gas.json';
 import bSteam from '../../reference/b-steam.json';
+import bWater from '../../reference/b-water.json';
 import cLiquid from '../../reference/c-liquid.json';
 import dTwoPhase from '../../reference/d-two-phase.json';
 import eFire from '../../reference/e-fire.json';
@@ -15,7 +16,7 @@ import fLoads from '../../reference/f-loads.json';
 import hLimits from '../../reference/h-limits.json';
 import iAreas from '../../reference/i-areas.json';
 
-const CASES = [aGas, bSteam, cLiquid, dTwoPhase, eFire, fLoads, hLimits, iAreas].flatMap(
+const CASES = [aGas, bSteam, bWater, cLiquid, dTwoPhase, eFire, fLoads, hLimits, iAreas].flatMap(
   (f) =>
     f.cases as unknown as {
       id: string;
