@@ -1,7 +1,7 @@
 /* Standard scenarios of cooling, heat and utilities (10 to 21). */
-import { kinds, say, type StandardScenario } from './standard';
+import { kinds, say, type WrittenScenario } from './standard';
 
-export const UTILITY_SCENARIOS: readonly StandardScenario[] = [
+export const UTILITY_SCENARIOS: readonly WrittenScenario[] = [
   {
     key: 'cooling-water-loss',
     name: 'Loss of cooling water',

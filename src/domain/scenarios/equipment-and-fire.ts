@@ -1,7 +1,7 @@
 /* Standard scenarios of broken equipment, fire and reaction (22 to 29). */
-import { ALL, kinds, say, type StandardScenario } from './standard';
+import { ALL, kinds, say, type WrittenScenario } from './standard';
 
-export const EQUIPMENT_SCENARIOS: readonly StandardScenario[] = [
+export const EQUIPMENT_SCENARIOS: readonly WrittenScenario[] = [
   {
     key: 'tube-rupture',
     name: 'Exchanger tube rupture, plate or coil break',

@@ -2,15 +2,28 @@
 import { UTILITY_SCENARIOS } from './cooling-and-heat';
 import { EQUIPMENT_SCENARIOS } from './equipment-and-fire';
 import { PROCESS_SCENARIOS } from './outlets-and-inlets';
-import { type StandardScenario } from './standard';
+import { type LoadWays, LOAD_WAYS } from './load-ways';
+import { type StandardScenario, type WrittenScenario } from './standard';
 import { SERVICE_SCENARIOS } from './tanks-and-service';
 
-export const SCENARIOS: readonly StandardScenario[] = [
+/** Every standard scenario says how its load is found; a missing entry is a fault of the list itself. */
+function loadWaysOf(key: string): LoadWays {
+  const ways = LOAD_WAYS[key];
+  if (!ways) throw new Error(`The standard scenario ${key} does not say how its load is found`);
+  return ways;
+}
+
+const WRITTEN: readonly WrittenScenario[] = [
   ...PROCESS_SCENARIOS,
   ...UTILITY_SCENARIOS,
   ...EQUIPMENT_SCENARIOS,
   ...SERVICE_SCENARIOS,
 ];
+
+export const SCENARIOS: readonly StandardScenario[] = WRITTEN.map((scenario) => ({
+  ...scenario,
+  load: loadWaysOf(scenario.key),
+}));
 
 const BY_KEY = new Map(SCENARIOS.map((scenario, order) => [scenario.key, { scenario, order }]));
 
@@ -33,4 +46,10 @@ export function placeholdersIn(text: string): string[] {
 export function sentencesFor(keyOrId: string, disposition: string): string[] {
   const scenario = scenarioByKey(keyOrId);
   return (scenario?.sentences ?? []).filter((one) => one.disposition === disposition).map((one) => one.text);
+}
+
+/** The standard scenarios whose load a method serves, in standard order; the id with or without its version. */
+export function scenariosServedBy(method: string): readonly StandardScenario[] {
+  const id = method.split('@')[0] ?? method;
+  return SCENARIOS.filter((scenario) => scenario.load.methods.some((one) => one === id));
 }

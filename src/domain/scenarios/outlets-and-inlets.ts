@@ -1,7 +1,7 @@
 /* Standard scenarios of valves, machines and filling (1 to 9). */
-import { ALL, kinds, say, type StandardScenario } from './standard';
+import { ALL, kinds, say, type WrittenScenario } from './standard';
 
-export const PROCESS_SCENARIOS: readonly StandardScenario[] = [
+export const PROCESS_SCENARIOS: readonly WrittenScenario[] = [
   {
     key: 'closed-outlet',
     name: 'Closed outlet (blocked discharge)',

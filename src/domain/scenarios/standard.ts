@@ -3,15 +3,16 @@ import { STATUSES, type Status } from '@domain/basis/figures';
 import type { Equipment } from '@domain/basis/equipment';
 import type { Utility } from '@domain/basis/registers';
 import type { Accumulation, Disposition } from '@domain/basis/scenarios';
+import type { LoadWays } from './load-ways';
 
 /** A sentence to start a reason from; {placeholders} are still to be filled in. */
 export type StartingSentence = { disposition: Exclude<Disposition, 'credible'>; text: string };
 
 /**
- * A standard cause of overpressure or vacuum. `accumulation` is what its answers start from (absent: not answered by
+ * A standard cause of overpressure or vacuum as it is written down, without its load. `accumulation` is what its answers start from (absent: not answered by
  * relief); `headerCommon` whether it adds to other systems at a header; `conditions` what it may depend on in the field.
  */
-export type StandardScenario = {
+export type WrittenScenario = {
   key: string;
   name: string;
   question: string;
@@ -25,6 +26,9 @@ export type StandardScenario = {
   utility?: Utility['kind'];
   conditions: readonly string[];
 };
+
+/** A standard cause with the ways in which its load is found. */
+export type StandardScenario = WrittenScenario & { load: LoadWays };
 
 export const ALL: readonly Status[] = STATUSES;
 

@@ -1,7 +1,7 @@
 /* Standard scenarios of surge, tanks, vacuum and service (30 to 35). */
-import { ALL, kinds, say, type StandardScenario } from './standard';
+import { ALL, kinds, say, type WrittenScenario } from './standard';
 
-export const SERVICE_SCENARIOS: readonly StandardScenario[] = [
+export const SERVICE_SCENARIOS: readonly WrittenScenario[] = [
   {
     key: 'hydraulic-surge',
     name: 'Hydraulic or steam hammer',
