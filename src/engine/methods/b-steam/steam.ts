@@ -2,6 +2,7 @@
 import { type Method } from '../../catalog/types';
 import { convert } from '../../quantity';
 import { type SheetBuilder, workSheet } from '../../sheet';
+import { saturationTemperature } from '../../water/saturation';
 import { input, optional, output, RELIEVING_INPUTS } from '../common/describe';
 import { letterStep } from '../common/letter-step';
 import { absolutePressure, relievingAbsolute } from '../common/pressures';
@@ -19,6 +20,20 @@ function tableValue(table: KshTable, P1: number, unit: string, kelvin: number): 
   return ksh7(convert(P, 'psig', { barometer }), convert(T, 'degF'));
 }
 
+/** How far below saturation a temperature may be, K, before it is more than the rounding of a steam table. */
+const ROUNDING = 1;
+
+/** Warns when the temperature given is that of water, not of steam, at the relieving pressure. */
+function warnBelowSaturation(sheet: SheetBuilder, P1: number, unit: string, T: number): void {
+  const boiling = saturationTemperature(convert({ value: P1, unit }, 'Pa_abs'));
+  if (boiling === undefined || T >= boiling - ROUNDING) return;
+  sheet.warn(
+    'BELOW_SATURATION',
+    `At this pressure steam is saturated at ${boiling.toFixed(1)} K (${(boiling - 273.15).toFixed(1)} °C, IAPWS-IF97); at the temperature given it is water. Size it as a liquid or as two-phase flow, or correct the temperature.`,
+    'at or above saturation',
+  );
+}
+
 /** KSH as given, from a table when a temperature is given, or 1 with the saturated steam said. */
 function superheat(sheet: SheetBuilder, P1: number, system: System, edition: string | undefined): number {
   if (sheet.has('KSH')) return sheet.number('KSH', '-', { above: 0, max: 1 }, 'K_{SH}');
@@ -31,6 +46,7 @@ function superheat(sheet: SheetBuilder, P1: number, system: System, edition: str
   const seventh = edition !== undefined && /\b[789]th/.test(edition) && !edition.includes('10th');
   const table = sheet.word('KSH_table', KSH_TABLES, KSH_TABLES[seventh ? 1 : 0]);
   const T = sheet.number('T', 'K', { above: 0 });
+  warnBelowSaturation(sheet, P1, SYSTEM_UNITS[system].P, T);
   const value = tableValue(table, P1, SYSTEM_UNITS[system].P, T);
   if (value === undefined)
     sheet.refuse(
