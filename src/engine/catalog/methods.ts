@@ -3,12 +3,14 @@ import { GAS_BACKPRESSURE } from '../methods/a-gas/backpressure';
 import { GAS } from '../methods/a-gas/gas';
 import { GAS_C } from '../methods/a-gas/gas-c';
 import { RATED } from '../methods/a-gas/rated';
+import { RATED_STEAM } from '../methods/b-steam/rated';
 import { STEAM_KSH } from '../methods/b-steam/ksh';
 import { STEAM } from '../methods/b-steam/steam';
 import { WATER_PROPERTIES } from '../methods/b-steam/water-properties';
 import { LIQUID_BACKPRESSURE } from '../methods/c-liquid/backpressure';
 import { LIQUID } from '../methods/c-liquid/liquid';
 import { LIQUID_NONCERTIFIED } from '../methods/c-liquid/noncertified';
+import { RATED_LIQUID } from '../methods/c-liquid/rated';
 import { VISCOSITY_FACTOR } from '../methods/c-liquid/viscosity';
 import { TWO_PHASE_METHODS } from '../methods/d-two-phase';
 import { FIRE_SUPERCRITICAL } from '../methods/e-fire/supercritical';
@@ -56,11 +58,13 @@ export const METHODS: readonly Method[] = [
   RATED,
   STEAM,
   STEAM_KSH,
+  RATED_STEAM,
   WATER_PROPERTIES,
   LIQUID_BACKPRESSURE,
   LIQUID,
   LIQUID_NONCERTIFIED,
   VISCOSITY_FACTOR,
+  RATED_LIQUID,
   ...TWO_PHASE_METHODS,
   FIRE_INSULATION,
   FIRE_SUPERCRITICAL,
