@@ -13,8 +13,23 @@ import fLoads from './f-loads.json';
 import gLines from './g-lines.json';
 import hLimits from './h-limits.json';
 import iAreas from './i-areas.json';
+import jDevices from './j-devices.json';
+import kTanks from './k-tanks.json';
 
-const FILES = { aGas, bSteam, bWater, cLiquid, dTwoPhase, eFire, fLoads, gLines, hLimits, iAreas };
+const FILES = {
+  aGas,
+  bSteam,
+  bWater,
+  cLiquid,
+  dTwoPhase,
+  eFire,
+  fLoads,
+  gLines,
+  hLimits,
+  iAreas,
+  jDevices,
+  kTanks,
+};
 
 describe.each(Object.entries(FILES))('%s', (_file, { cases }) => {
   const all = cases as unknown as ReferenceCase[];

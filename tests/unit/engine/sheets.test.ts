@@ -15,8 +15,22 @@ import eFire from '../../reference/e-fire.json';
 import fLoads from '../../reference/f-loads.json';
 import hLimits from '../../reference/h-limits.json';
 import iAreas from '../../reference/i-areas.json';
+import jDevices from '../../reference/j-devices.json';
+import kTanks from '../../reference/k-tanks.json';
 
-const CASES = [aGas, bSteam, bWater, cLiquid, dTwoPhase, eFire, fLoads, hLimits, iAreas].flatMap(
+const CASES = [
+  aGas,
+  bSteam,
+  bWater,
+  cLiquid,
+  dTwoPhase,
+  eFire,
+  fLoads,
+  hLimits,
+  iAreas,
+  jDevices,
+  kTanks,
+].flatMap(
   (f) =>
     f.cases as unknown as {
       id: string;

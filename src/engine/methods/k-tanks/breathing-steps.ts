@@ -40,9 +40,11 @@ export const VENT_UNITS: Record<System, { flow: string; volume: string; air: str
 /** Cubic metres in a barrel of 42 US gallons. */
 const BARREL = 42 * 0.003785411784;
 
-/** True when the older table method is asked for by its edition. */
-export function isOlder(edition: string | undefined): boolean {
-  return edition !== undefined && edition.includes('5th');
+/** True when the older table method is asked for, by the input or by the edition of the calculation. */
+export function isOlder(sheet: SheetBuilder, edition: string | undefined): boolean {
+  const [current, older] = VENTING_EDITIONS;
+  const asked = edition?.includes('5th') === true ? older : current;
+  return sheet.word('venting_edition', VENTING_EDITIONS, asked) === older;
 }
 
 /** Inputs of the tank that both directions of breathing take. */
@@ -75,6 +77,14 @@ export const TANK_INPUTS: readonly MethodInput[] = [
   optional('double_wall_share', 'share of the surface behind a second wall', 'dimensionless', {
     rangeKey: 'fraction',
   }),
+  optional(
+    'venting_edition',
+    'edition of the venting equations (the current ones when not given)',
+    undefined,
+    {
+      words: [...VENTING_EDITIONS],
+    },
+  ),
 ];
 
 /** Outputs of both directions. */

@@ -115,7 +115,7 @@ export const IN_BREATHING: Method = {
   work(inputs, edition) {
     return workSheet(this, inputs, edition, (sheet) => {
       const system = systemOf(inputs, ['emptying_rate', 'tank_volume']);
-      const older = isOlder(edition);
+      const older = isOlder(sheet, edition);
       const air = older ? 'SCFH' : VENT_UNITS[system].air;
       const { liquid, thermal } = older
         ? olderSteps(sheet, system)

@@ -190,7 +190,7 @@ export const OUT_BREATHING: Method = {
   work(inputs, edition) {
     return workSheet(this, inputs, edition, (sheet) => {
       const system = systemOf(inputs, ['filling_rate', 'tank_volume']);
-      if (isOlder(edition)) return olderSteps(sheet, system);
+      if (isOlder(sheet, edition)) return olderSteps(sheet, system);
       currentSteps(sheet, system);
     });
   },
