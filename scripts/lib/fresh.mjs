@@ -4,6 +4,7 @@ import { join } from 'node:path';
 
 const BUILT_FROM = [
   'src',
+  'tests/reference',
   'workflows',
   'migrations',
   'public',

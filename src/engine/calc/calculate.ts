@@ -10,7 +10,7 @@ export type CalcRequest = { topic: string; inputs: Record<string, CalcValue>; ed
 
 /**
  * What comes back. A list under a numbered input (one a segment, one a point) is one calculation; any other list is worked
- * element by element: outputs are lists, steps are left out.
+ * element by element: outputs are lists, and the steps of the elements follow one another.
  */
 export type CalcAnswer = {
   topic: string;
@@ -136,6 +136,7 @@ export function calculate(request: CalcRequest): CalcAnswer {
     topic,
     method: id,
     outputs: columns(all),
+    steps: all.flatMap((w) => w.steps),
     warnings: all.flatMap((w) => w.warnings),
     ...(refused ? { refused } : {}),
   };

@@ -11,7 +11,7 @@ import {
   systemSheets,
 } from '@services/views/system';
 import { dueView } from '@services/views/due';
-import { methodGroups, methodView } from '@services/views/methods';
+import { methodFile, methodView } from '@services/views/methods';
 import { headingOf, myWorkView } from '@services/views/my-work';
 import { rulebookView } from '@services/views/rulebook';
 import { searchView } from '@services/views/search';
@@ -181,7 +181,7 @@ describe('lists', () => {
   });
 
   it('show every method and every rule with its source', async () => {
-    const methods = methodGroups().flatMap((group) => group.methods);
+    const methods = methodFile().groups.flatMap((group) => group.methods);
     expect(methods.length).toBeGreaterThan(15);
     expect(methods.every((one) => one.source !== '' && !('work' in one))).toBe(true);
     expect(methodView('a.gas').ok).toBe(true);
