@@ -98,9 +98,9 @@ function rounding(value: number): number {
 
 /**
  * The state at P in Pa where h in J/kg or s in J/(kg·K) has the given value: found leg by leg, so that boiling needs no
- * iteration. Where two basic equations leave a gap on their common boundary (at most some 100 J/kg, far below their uncertainty), the
- * state is a blend of both; where they overlap, the region of lower temperature is taken. `coldest` lets a search look
- * a little below the range.
+ * iteration. Where two basic equations leave a gap on their common boundary (at most some 100 J/kg, far below their
+ * uncertainty), the state is a blend of both; where they overlap, the region of lower temperature is taken. `coldest`
+ * lets a search look a little below the range.
  */
 export function onIsobar(P: number, given: Given, value: number, coldest: number = LIMITS_T.lowest): Found {
   let before: PhaseState | undefined;
