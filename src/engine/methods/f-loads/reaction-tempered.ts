@@ -56,7 +56,7 @@ function readSystem(sheet: SheetBuilder): TemperedSystem {
       'v_vapour',
       'The specific volume of the vapour must be above that of the liquid.',
     );
-  if (mass * vf > volume * 1.001)
+  if (mass * vf > volume * 1.01)
     sheet.refuse(
       'VALUE_IMPOSSIBLE',
       'mass',

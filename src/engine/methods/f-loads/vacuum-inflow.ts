@@ -53,7 +53,7 @@ export const VACUUM_INFLOW: Method = {
     'Constant pressure at the vacuum limit; ideal gas comes in at its own temperature; condensing and cooling rates are the greatest ones; nothing is made up by evaporation.',
   inputs: [
     optional('liquid_out', 'liquid drawn out', 'volume-flow'),
-    optional('condensing_rate', 'vapour that condenses', 'mass-flow', { rangeKey: 'reliefLoad' }),
+    optional('condensing_rate', 'vapour that condenses', 'mass-flow'),
     optional('rho_vapour', 'density of that vapour', 'density', { rangeKey: 'gasDensity' }),
     optional('gas_volume', 'volume of gas that cools', 'volume', { rangeKey: 'volume' }),
     optional('cooling_rate', 'its rate of cooling', 'temperature-rate'),

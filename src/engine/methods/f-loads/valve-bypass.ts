@@ -116,9 +116,11 @@ export const CONTROL_VALVE_BYPASS: Method = {
     ...VALVE_INPUTS.filter((one) => !['d', 'D1', 'D2'].includes(one.name)).map((one) =>
       one.name === 'coefficient' ? { ...one, required: true } : one,
     ),
-    input('bypass_coefficient', 'flow coefficient of the open bypass, of the same kind', 'flow-coefficient', {
-      rangeKey: 'controlValveKv',
-    }),
+    input(
+      'bypass_coefficient',
+      'flow coefficient of the open bypass, of the same kind (0 when shut)',
+      'flow-coefficient',
+    ),
     optional('T', 'temperature of the gas', 'temperature', { rangeKey: 'relievingTemperature' }),
     optional('Z', 'compressibility factor', 'dimensionless', { rangeKey: 'z' }),
     optional('M', 'molar mass', 'molar-mass', { rangeKey: 'molarMass' }),
