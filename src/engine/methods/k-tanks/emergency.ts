@@ -57,9 +57,9 @@ export function boilingAir(heat: number, latent: number, T: number, M: number, s
 }
 
 /**
- * Table H-10 of 29 CFR 1910.106: wetted area in ft² against SCFH of free air. Rows at 20, 100, 500, 942.5 (interpolated), 1400 and
- * 2800 ft² were compared with Ludwig, vol. 1, 3rd ed., Table 7-17; the other rows are from memory and follow the formula within
- * 0.5 %.
+ * Table H-10 of 29 CFR 1910.106: wetted area in ft² against SCFH of free air. The rows at 20, 100, 500, 900, 1 000 and
+ * 1 400 ft² were compared with Ludwig, vol. 1, 3rd ed., p. 475 and Table 7-17; the others are from memory, and every row follows
+ * 70.5·Q/1337 with the heat form within 0.6 %. Between rows the regulation interpolates.
  */
 export const REGULATION_TABLE = {
   x: [

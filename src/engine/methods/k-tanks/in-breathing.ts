@@ -94,7 +94,7 @@ export const IN_BREATHING: Method = {
   editions: [...VENTING_EDITIONS],
   source: VENTING_SOURCE,
   validity:
-    'Fixed-roof tanks at ambient storage, not refrigerated; rain on a warm roof is within the thermal term; hot vapour that condenses is not. Blanket gas is not credited. The equations set actual cubic metres of liquid equal to normal cubic metres of air. The 5th edition is kept for tanks built by it.',
+    'Fixed-roof tanks at ambient storage, not refrigerated; rain on a warm roof is within the thermal term; hot vapour that condenses is not. Blanket gas is not credited. The equations set cubic metres of liquid equal to normal cubic metres of air, and cubic feet to standard cubic feet, which are 5 % less air. The 5th edition is kept for tanks built by it.',
   inputs: [
     input('emptying_rate', 'highest emptying rate', 'volume-flow', { rangeKey: 'pumpFlow' }),
     optional('C', 'factor of latitude, vapour pressure and storage temperature', 'dimensionless'),

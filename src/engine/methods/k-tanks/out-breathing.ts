@@ -161,7 +161,7 @@ export const OUT_BREATHING: Method = {
   editions: [...VENTING_EDITIONS],
   source: VENTING_SOURCE,
   validity:
-    'Fixed-roof tanks at ambient storage, not refrigerated; no hot feed, no blanket gas and no flash beyond what is stated. The equations set actual cubic metres of liquid equal to normal cubic metres of air. The 5th edition is kept for tanks built by it.',
+    'Fixed-roof tanks at ambient storage, not refrigerated; no hot feed, no blanket gas and no flash beyond what is stated. The equations set cubic metres of liquid equal to normal cubic metres of air, and cubic feet to standard cubic feet, which are 5 % less air. The 5th edition is kept for tanks built by it.',
   inputs: [
     input('filling_rate', 'highest filling rate', 'volume-flow', { rangeKey: 'pumpFlow' }),
     optional('volatility_factor', 'factor on the filling rate (2 for a volatile liquid)', 'dimensionless'),
