@@ -51,6 +51,11 @@ function spread(method: Method, inputs: Record<string, CalcValue>): Record<strin
   return Object.fromEntries(entries);
 }
 
+/** The inputs of a request in the engine's form: numbered inputs written out, of other lists the element at `place`. */
+export function engineInputs(method: Method, inputs: Record<string, CalcValue>, place = 0): Inputs {
+  return row(spread(method, inputs), place);
+}
+
 /** Results of all places as lists. */
 function columns(all: readonly Worked[]): Record<string, CalcValue> {
   const names = [...new Set(all.flatMap((w) => Object.keys(w.outputs)))];

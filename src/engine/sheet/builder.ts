@@ -113,6 +113,12 @@ export class SheetBuilder {
     if (given.unit !== unit) this.checkUnit(name, given.unit, unit);
     this.checkPlausible(name, given);
     const value = convert(given, unit);
+    if (!Number.isFinite(value))
+      this.refuse(
+        'VALUE_IMPOSSIBLE',
+        name,
+        `The ${this.meaning(name)} is too large for a number in ${unitLabel(unit)}.`,
+      );
     this.checkBounds(name, value, unit, bounds);
     return this.keep(name, value, tex);
   }
