@@ -4,6 +4,12 @@ import { getViteConfig } from 'astro/config';
 export default getViteConfig({
   test: {
     include: ['tests/{unit,reference,integration}/**/*.test.{ts,tsx}'],
+    setupFiles: ['tests/support/seeded.ts'],
+    coverage: {
+      include: ['src/engine/**/*.ts'],
+      reportsDirectory: 'test-results/coverage',
+      reporter: ['text', 'json-summary'],
+    },
     testTimeout: 20_000,
     hookTimeout: 60_000,
   },

@@ -8,6 +8,7 @@ export default defineConfig({
   resolve: { alias: { '@engine': from('./src/engine'), '@domain': from('./src/domain') } },
   test: {
     include: ['tests/unit/engine/{bare,lines}/*.test.ts'],
+    setupFiles: ['tests/support/seeded.ts'],
     testTimeout: 20_000,
   },
 });
