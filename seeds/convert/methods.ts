@@ -12,6 +12,7 @@ const CARRIED = new Set([
   'a.gas',
   'b.steam',
   'c.liquid',
+  'd.omega-saturated',
   'e.fire-unwetted',
   'e.fire-wetted',
   'f.blocked-outlet',

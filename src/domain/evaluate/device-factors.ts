@@ -11,7 +11,14 @@ import { creditedMembers, type CredibleAnswer, type Work } from './work';
 
 /** Effective coefficients of API 520-1 (from memory of the standard), by topic. */
 const EFFECTIVE_KD: Record<string, number> = { a: 0.975, b: 0.975, c: 0.65, d: 0.85, e: 0.975 };
-const NONCERTIFIED_KD = 0.62;
+/** Methods whose coefficient is another than that of their topic. */
+const KD_OF_METHOD: Record<string, number> = {
+  'c.liquid-noncertified': 0.62,
+  'd.omega-subcooled': 0.65,
+  'd.real-gas-size': 0.975,
+};
+/** Methods that choose by the phase that they find at the inlet. */
+const KD_BY_PHASE = new Set(['d.hem-size', 'd.comparison']);
 
 type Coefficient = 'gas' | 'liquid' | 'kb' | 'kw' | 'kc';
 const one = (path: Path): Found => ({ value: { value: 1, unit: '-' }, path });
@@ -35,7 +42,8 @@ function dischargeCoefficient(points: readonly ReliefPoint[], method: string): F
   const effective = EFFECTIVE_KD[topic];
   const onlyActual = points.length > 0 && points.every((point) => effectiveArea(point) === undefined);
   if (effective === undefined || (onlyActual && certified)) return certified;
-  const value = method === 'c.liquid-noncertified' ? NONCERTIFIED_KD : effective;
+  if (KD_BY_PHASE.has(method)) return undefined;
+  const value = KD_OF_METHOD[method] ?? effective;
   return { value: { value, unit: '-' }, path: 'method default' };
 }
 

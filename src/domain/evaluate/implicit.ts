@@ -14,6 +14,8 @@ export function fillImplicit(method: string, resolved: Resolved, values: Values)
   const made: Made = { inputs: { ...resolved.inputs }, from: { ...resolved.from } };
   const missing = new Set(resolved.missing.map((item) => item.name));
   for (const input of methodById(method)?.inputs ?? []) {
+    // What is given for each part of a series belongs to that part: nothing else may stand in for it.
+    if (input.each !== undefined) continue;
     if (input.name in made.inputs || missing.has(input.name)) continue;
     const found = values[input.name]?.();
     if (!found) continue;
@@ -77,6 +79,33 @@ export function fluidValues(work: Work, fluid: Fluid | undefined): Values {
     Pc: at('Pc'),
     Pv: () => vapourPressure(work, fluid),
     v: () => vapourVolume(fluid),
+  };
+}
+
+/** The fluid in the words of the engine's library, where the document says what it is made of (by mole). */
+function wordsOf({ id, from }: Fluid): Found | undefined {
+  const path = `fluids/${id}/from`;
+  if (from.kind === 'water') return { value: 'water', path };
+  if (from.kind === 'substance' && from.substance !== undefined) return { value: from.substance, path };
+  if (from.kind !== 'composition' || from.per === 'mass') return undefined;
+  const parts = (from.parts ?? []).map(({ substance, amount }) => {
+    const q = quantityOf(amount);
+    return q && `${substance} ${String(toSI(q))}`;
+  });
+  return parts.length > 0 && parts.every(Boolean) ? { value: parts.join('; '), path } : undefined;
+}
+
+/** What only the two-phase methods ask of a fluid, under their names: what it is made of, quality, saturation, critical point. */
+export function twoPhaseValues(work: Work, fluid: Fluid | undefined): Values {
+  if (!fluid) return {};
+  const at = (field: keyof Fluid) => () => figureOf(work, `fluids/${fluid.id}/${field}`);
+  return {
+    fluid: () => wordsOf(fluid),
+    x0: at('quality'),
+    omega: at('omega'),
+    Ps: () => vapourPressure(work, fluid),
+    Tc: at('Tc'),
+    boiling_range: at('boilingRange'),
   };
 }
 

@@ -5,7 +5,7 @@ import { backPressureOf, type BackPressure } from './back-pressure';
 import { factorValues } from './device-factors';
 import { externalAsSheet, externalById } from './external';
 import { solveFixedPoint } from './fixed-point';
-import { fillImplicit, fluidOf, fluidValues, limitValues, type Values } from './implicit';
+import { fillImplicit, fluidOf, fluidValues, limitValues, twoPhaseValues, type Values } from './implicit';
 import { areaKindOf, installedFor } from './installed';
 import { type Found, type Resolved, resolveInputs } from './inputs';
 import { missingSheet, outputOf, refusedSheet, statedSheet, workedSheet } from './sheets';
@@ -82,12 +82,19 @@ function settled(work: Work, ca: CredibleAnswer, at: (back: BackPressure) => She
   const backAt = backPressureOf(work, ca);
   const quiet = backAt(0);
   let latest: { pa: number; sheet: Sheet } | undefined;
+  let path = quiet.path;
   const sheetAt = (pa: number): Sheet => {
-    if (latest?.pa !== pa) latest = { pa, sheet: at({ ...quiet, pa }) };
+    if (latest?.pa !== pa) latest = { pa, sheet: at({ pa, path }) };
     return latest.sheet;
   };
-  const range = { lo: 0, hi: HIGHEST_BACK_PRESSURE };
-  const solved = solveFixedPoint((pa) => backAt(flowThrough(work, ca, sheetAt(pa))).pa, quiet.pa, range);
+  const next = (pa: number): number => {
+    const back = backAt(flowThrough(work, ca, sheetAt(pa)));
+    path = back.path;
+    return back.pa;
+  };
+  const relieving = outputOf(work.sheets[`limit:${ca.id}`], 'P1');
+  const range = { lo: 0, hi: Math.max(relieving ? toSI(relieving) : HIGHEST_BACK_PRESSURE, quiet.pa) };
+  const solved = solveFixedPoint(next, quiet.pa, range);
   const sheet = sheetAt(solved.value);
   if (solved.converged || sheet.refused) return sheet;
   const text = `Flow and back pressure do not settle: ${solved.why}.`;
@@ -127,13 +134,17 @@ function sizeValues(
     ...factorValues(work, ca, method, back),
     ...loadFlow(work, ca),
     balanced: () => balancedFlag(work, ca),
-    P2: () => ({ value: fromSI(back.pa, work.basis.units === 'US' ? 'psia' : 'kPa_abs'), path: back.path }),
-    back_pressure: () => backGauge(work, back),
+    P2: () => backAbsolute(work, back),
+    // Two-phase methods take every pressure as absolute and so need no barometer.
+    back_pressure: () => (method.startsWith('d.') ? backAbsolute(work, back) : backGauge(work, back)),
     ...isoValues(work, ca, back),
     ...exposedValues(work, ca),
+    ...(method.startsWith('d.') ? twoPhaseValues(work, fluidOf(work, ca)) : {}),
     ...(isTankMethod(method) ? ventValues(work, ca) : {}),
   };
   if ('KSH' in resolved.inputs) delete values['T'];
+  // Of a saturated inlet pressure and quality are enough: a temperature beside them could only contradict.
+  if (values['x0']?.() || 'x0' in resolved.inputs) delete values['T0'];
   return own && path !== undefined && !('KSH' in resolved.inputs)
     ? { ...values, T: () => ({ value: own, path }) }
     : values;
@@ -170,6 +181,10 @@ function balancedFlag(work: Work, ca: CredibleAnswer): Found | undefined {
   const member = ca.group && creditedMembers(work.lookup, ca.group, ca.answer)[0];
   if (!member || member.point.axes.balance === 'none') return undefined;
   return { value: true, path: `reliefPoints/${member.point.id}/axes/balance` };
+}
+
+function backAbsolute(work: Work, back: BackPressure): Found {
+  return { value: fromSI(back.pa, work.basis.units === 'US' ? 'psia' : 'kPa_abs'), path: back.path };
 }
 
 function backGauge(work: Work, back: BackPressure): Found {

@@ -4,17 +4,9 @@ import { unitLabel } from '../../quantity';
 import { type SheetBuilder } from '../../sheet';
 import { optional } from '../common/describe';
 import { type System } from '../common/system';
-import { FLUX_UNITS, OMEGA_CLAUSE } from './common';
-import { omegaRatio } from './omega';
-import {
-  BOILING_DELAY,
-  type FlashInlet,
-  mixtureVolume,
-  omegaDelayed,
-  omegaFromProperties,
-  omegaFromVolumes,
-  omegaNonFlashing,
-} from './omega-forms';
+import { FLUX_UNITS } from './common';
+import { mixtureVolume, omegaFromVolumes, omegaNonFlashing } from './omega-forms';
+import { DELAYS, fromInlet, omegaInfo } from './omega-inlet';
 
 /** The ways to omega that a sheet may take. */
 export const OMEGA_FORMS = [
@@ -25,8 +17,6 @@ export const OMEGA_FORMS = [
   'delayed boiling',
 ] as const;
 type Form = (typeof OMEGA_FORMS)[number];
-
-const DELAYS = Object.keys(BOILING_DELAY) as (keyof typeof BOILING_DELAY)[];
 
 /** Inputs of the ways to omega. */
 export const OMEGA_INPUTS: readonly MethodInput[] = [
@@ -52,15 +42,19 @@ export const OMEGA_INPUTS: readonly MethodInput[] = [
 export type OmegaRead = { omega: number; v0: number };
 
 function formOf(sheet: SheetBuilder): Form {
-  const derived: Form = sheet.has('omega')
+  const derived: Form | undefined = sheet.has('omega')
     ? 'given'
     : sheet.has('v9')
       ? 'two volumes'
-      : sheet.has('latent_heat')
+      : sheet.has('v_vapour') && sheet.has('latent_heat')
         ? 'inlet properties'
-        : sheet.has('k')
-          ? 'no flashing'
-          : 'two volumes';
+        : undefined;
+  if (derived === undefined && !sheet.has('omega_form'))
+    sheet.refuse(
+      'INPUT_MISSING',
+      'v9',
+      'Omega cannot be found: give the specific volume at 90 % of the inlet pressure (v9), or omega itself, or x0, v_vapour, v_liquid, cp, T0 and latent_heat.',
+    );
   return sheet.word('omega_form', OMEGA_FORMS, derived);
 }
 
@@ -116,38 +110,18 @@ function readPhases(sheet: SheetBuilder, system: System) {
   return { x0, vVapour, vLiquid };
 }
 
-/** Reads the inlet in coherent SI, keeps the symbols in SI, and so lets one equation serve both systems. */
-export function readFlashInlet(sheet: SheetBuilder, P0: number, withQuality = true): FlashInlet {
-  const x0 = withQuality ? sheet.number('x0', '-', { min: 0, max: 1 }, 'x_0') : 0;
-  const vVapour = sheet.number('v_vapour', 'm3/kg', { above: 0 }, 'v_v');
-  const vLiquid = sheet.number('v_liquid', 'm3/kg', { above: 0 }, 'v_l');
-  if (vVapour <= vLiquid)
-    sheet.refuse(
-      'VALUE_IMPOSSIBLE',
-      'v_vapour',
-      'The vapour cannot be denser than the liquid: v_vapour must be above v_liquid.',
+/** Omega as known; held against the two volumes where these are known too. */
+function givenOmega(sheet: SheetBuilder, v0: number, system: System): number {
+  const omega = sheet.number('omega', '-', { min: 0 }, '\\omega');
+  if (!sheet.has('v9')) return omega;
+  const other = omegaFromVolumes(v0, sheet.number('v9', FLUX_UNITS[system].v, { above: 0 }, 'v_9'));
+  if (Math.abs(omega - other) > 0.05 * Math.abs(other))
+    sheet.warn(
+      'OMEGA_DISAGREES',
+      `Omega is given as ${omega.toPrecision(3)}, but v0 and v9 make it ${other.toPrecision(3)}: one of them is of another state.`,
+      'within 5 %',
     );
-  const cp = sheet.number('cp', 'J/(kg.K)', { above: 0 }, 'c_p');
-  const T0 = sheet.number('T0', 'K', { above: 0 }, 'T_0');
-  const latentHeat = sheet.number('latent_heat', 'J/kg', { above: 0 }, '\\lambda');
-  return { x0, vVapour, vLiquid, cp, T0, P0, latentHeat };
-}
-
-type Show = (key: string) => string;
-const flashTex = (v: Show): string =>
-  `\\frac{${v('cp')} \\cdot ${v('T0')} \\cdot ${v('P0 SI')}}{${v('v0 SI')}} \\left(\\frac{${v('v_vapour')} - ${v('v_liquid')}}{${v('latent_heat')}}\\right)^2`;
-const vapourTex = (v: Show): string => `\\frac{${v('x0')} \\cdot ${v('v_vapour')}}{${v('v0 SI')}}`;
-
-function omegaInfo(value: number, memory: boolean) {
-  return {
-    key: 'omega',
-    tex: '\\omega',
-    meaning: 'omega parameter',
-    value,
-    unit: '-',
-    clause: OMEGA_CLAUSE,
-    memory,
-  };
+  return omega;
 }
 
 function fromTwoVolumes(sheet: SheetBuilder, v0: number, system: System): number {
@@ -161,58 +135,6 @@ function fromTwoVolumes(sheet: SheetBuilder, v0: number, system: System): number
   return sheet.step(
     omegaInfo(omegaFromVolumes(v0, v9), false),
     (v) => `9 \\left(\\frac{${v('v9')}}{${v('v0')}} - 1\\right)`,
-  );
-}
-
-function fromInlet(sheet: SheetBuilder, form: Form, P0: number): number {
-  const inlet = readFlashInlet(sheet, P0);
-  sheet.keep('P0 SI', P0, 'P_{0,Pa}');
-  sheet.keep('v0 SI', mixtureVolume(inlet.x0, inlet.vVapour, inlet.vLiquid), 'v_{0,SI}');
-  if (form === 'inlet properties')
-    return sheet.step(
-      omegaInfo(omegaFromProperties(inlet), true),
-      (v) =>
-        `${vapourTex(v)} \\left(1 - \\frac{2 \\cdot ${v('P0 SI')} (${v('v_vapour')} - ${v('v_liquid')})}{${v('latent_heat')}}\\right) + ${flashTex(v)}`,
-    );
-  const a = sheet.keep('a', BOILING_DELAY[sheet.word('delay_for', DELAYS, 'safety valve')]);
-  const equilibrium = omegaDelayed(inlet, 0, omegaRatio).omega;
-  sheet.step(
-    {
-      key: 'omega_e',
-      tex: '\\omega_e',
-      meaning: 'omega without delay of boiling',
-      value: equilibrium,
-      unit: '-',
-      memory: true,
-    },
-    (v) => `${vapourTex(v)} + ${flashTex(v)}`,
-  );
-  sheet.step(
-    {
-      key: 'eta_e',
-      tex: '\\eta_e',
-      meaning: 'critical pressure ratio without delay',
-      value: omegaRatio(equilibrium),
-      unit: '-',
-    },
-    (v) => `\\eta_c(${v('omega_e')})`,
-  );
-  const { omega, N } = omegaDelayed(inlet, a, omegaRatio);
-  sheet.step(
-    {
-      key: 'N',
-      meaning: 'share of equilibrium boiling',
-      value: N,
-      unit: '-',
-      clause: 'ISO 4126-10; Diener and Schmidt 2004',
-      memory: true,
-    },
-    (v) =>
-      `\\min\\left(1, \\left(${v('x0')} + \\frac{${v('cp')} \\cdot ${v('T0')} \\cdot ${v('P0 SI')} (${v('v_vapour')} - ${v('v_liquid')})}{${v('latent_heat')}^2} \\ln\\frac{1}{${v('eta_e')}}\\right)^{${v('a')}}\\right)`,
-  );
-  return sheet.step(
-    { ...omegaInfo(omega, true), clause: 'ISO 4126-10; Diener and Schmidt 2004' },
-    (v) => `${vapourTex(v)} + ${v('N')} \\cdot ${flashTex(v)}`,
   );
 }
 
@@ -230,10 +152,10 @@ export function readOmega(sheet: SheetBuilder, system: System, P0: number): Omeg
   const form = formOf(sheet);
   const v0 = volumeStep(sheet, system);
   const ways: Record<Form, () => number> = {
-    given: () => sheet.number('omega', '-', { min: 0 }, '\\omega'),
+    given: () => givenOmega(sheet, v0, system),
     'two volumes': () => fromTwoVolumes(sheet, v0, system),
-    'inlet properties': () => fromInlet(sheet, form, P0),
-    'delayed boiling': () => fromInlet(sheet, form, P0),
+    'inlet properties': () => fromInlet(sheet, 'inlet properties', P0),
+    'delayed boiling': () => fromInlet(sheet, 'delayed boiling', P0),
     'no flashing': () => withoutFlashing(sheet, system),
   };
   const omega = ways[form]();

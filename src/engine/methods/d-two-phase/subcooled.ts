@@ -16,7 +16,7 @@ import {
 } from './common';
 import { subcooledFlux, transitionRatio } from './omega';
 import { omegaSubcooledFromProperties } from './omega-forms';
-import { readFlashInlet } from './omega-inputs';
+import { readFlashInlet } from './omega-inlet';
 import { fluxStep, regionSteps } from './subcooled-steps';
 import { DOUBT_INPUTS, inSI, warnDoubts } from './warnings';
 

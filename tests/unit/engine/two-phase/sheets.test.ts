@@ -66,7 +66,11 @@ describe('forms of omega on a sheet', () => {
     const omega = (inputs: Inputs) => value(workMethod('d.omega-saturated', inputs), 'omega');
     const { latent_heat: _, ...frozen } = WATER_10_BAR;
     expect(omega(WATER_10_BAR)).toBeCloseTo(1.6, 0);
-    expect(omega(frozen)).toBeLessThan(1 / 1.3);
+    expect(workMethod('d.omega-saturated', frozen).refused).toMatchObject({
+      code: 'INPUT_MISSING',
+      field: 'v9',
+    });
+    expect(omega({ ...frozen, omega_form: 'no flashing' })).toBeLessThan(1 / 1.3);
     expect(omega({ ...WATER_10_BAR, omega: q(3, '-') })).toBe(3);
   });
 
