@@ -145,7 +145,12 @@ function withMass(work: Work, ca: CredibleAnswer, sheet: Sheet, at: Path): Sheet
   const volume = outputOf(sheet, ...VOLUME_NAMES);
   const fluid = ca.answer.fluid === undefined ? undefined : work.lookup.fluids.get(ca.answer.fluid);
   const density = quantityOf(fluid?.rhoLiquid);
-  if (!volume || !density || !fluid) {
+  if (!volume) {
+    const text =
+      'This method finds no flow: state the load, or choose a method that ends in one and use this result in it.';
+    return { ...sheet, refused: { code: 'NO_FLOW_FOUND', text, field: at } };
+  }
+  if (!density || !fluid) {
     const text = 'The load comes as a volume: give the liquid density of the fluid to turn it into a mass.';
     return {
       ...sheet,
