@@ -52,10 +52,18 @@ export type RegisterQuery = {
   /** Words to be found in tag, name, service … */
   text?: string;
   cursor?: string;
+  /** The page that ends right before this row; counts before `cursor`. */
+  before?: string;
   limit?: number;
 };
 
-export type RegisterPage<R> = { rows: Listed<R>[]; total: number; next: string | null };
+export type RegisterPage<R> = {
+  rows: Listed<R>[];
+  total: number;
+  next: string | null;
+  /** What `before` is for the page before this one; null on the first. */
+  previous: string | null;
+};
 
 type Columns = Record<string, unknown>;
 type Mark = [empty: number, value: string | number | null, tag: string, documentId: Id, elementId: Id];
@@ -137,12 +145,12 @@ function markOf(row: Columns, column: string): string {
   return Buffer.from(JSON.stringify(mark)).toString('base64url');
 }
 
-const AFTER = `(?? IS NULL) > ? OR ((?? IS NULL) = ? AND
-  (?? SIGN ? OR (?? IS ? AND (tag, document_id, element_id) > (?, ?, ?))))`;
+const BEYOND = `(?? IS NULL) AWAY ? OR ((?? IS NULL) = ? AND
+  (?? SIGN ? OR (?? IS ? AND (tag, document_id, element_id) AWAY (?, ?, ?))))`;
 
 /**
- * A page of a register: rows in order (empty values last, then by tag), how many match in all, and the cursor of
- * the next page. An unknown sort column or cursor gives the first page by tag.
+ * A page of a register: rows in order (empty values last, then by tag), how many match in all, and the cursors of
+ * the next page and of the one before. An unknown sort column or cursor gives the first page by tag.
  */
 export async function listRegister<N extends RegisterName>(
   db: Db,
@@ -152,17 +160,21 @@ export async function listRegister<N extends RegisterName>(
   const limit = Math.min(Math.max(query.limit ?? 50, 1), 2_000);
   const column = snake(query.sort !== undefined && hasColumn(name, query.sort) ? query.sort : 'tag');
   const counted = (await matching(db, name, query).count('* as n').first()) as { n: number } | undefined;
+  const back = readMark(query.before) !== undefined;
   const found = await inOrder(db, name, query, column, limit + 1);
-  const page = found.slice(0, limit);
-  const last = page.at(-1);
+  const more = found.length > limit;
+  const page = back ? found.slice(0, limit).reverse() : found.slice(0, limit);
+  const [first, last] = [page[0], page.at(-1)];
+  const later = back || readMark(query.cursor) !== undefined;
   return {
     rows: await whole(db, name, query, page),
     total: counted?.n ?? 0,
-    next: found.length > limit && last ? markOf(last, column) : null,
+    next: (back || more) && last ? markOf(last, column) : null,
+    previous: (back ? more : later) && first ? markOf(first, column) : null,
   };
 }
 
-/** The keys of a page in order: narrow rows sort several times faster than whole ones. */
+/** The keys of a page in order, nearest first when it goes back: narrow rows sort several times faster than whole ones. */
 async function inOrder(
   db: Db,
   name: RegisterName,
@@ -172,13 +184,16 @@ async function inOrder(
 ): Promise<Columns[]> {
   const descending = query.direction === 'desc';
   const rows = matching(db, name, query).select(...new Set(['document_id', 'element_id', 'tag', column]));
-  const mark = readMark(query.cursor);
+  const backwards = readMark(query.before);
+  const back = backwards !== undefined;
+  const mark = backwards ?? readMark(query.cursor);
   if (mark) {
     const [empty, value, ...last] = mark;
-    const sql = AFTER.replace('SIGN', descending ? '<' : '>');
+    const sql = BEYOND.replaceAll('AWAY', back ? '<' : '>').replace('SIGN', descending !== back ? '<' : '>');
     void rows.whereRaw(`(${sql})`, [column, empty, column, empty, column, value, column, value, ...last] as never[]);
   }
-  const order = `?? ${descending ? 'DESC' : 'ASC'} NULLS LAST, tag, document_id, element_id`;
+  const ties = ['tag', 'document_id', 'element_id'].map((tie) => (back ? `${tie} DESC` : tie)).join(', ');
+  const order = `?? ${descending !== back ? 'DESC' : 'ASC'} NULLS ${back ? 'FIRST' : 'LAST'}, ${ties}`;
   return (await rows.orderByRaw(order, [column]).limit(limit)) as Columns[];
 }
 

@@ -62,8 +62,11 @@ async function results(): Promise<Set<string>> {
   const base = `${SITE}/cases/${number}`;
   const pages = await Promise.all([`${base}/scenarios`, `${base}/sheets`, `${base}/summary`].map(owen.get));
   const all = new Set(pages.flatMap(({ text }) => [...figuresInTables(text)]));
-  const inputs = await owen.get(`${base}/changes`);
-  const values = [...inputs.text.matchAll(/ value="([\d.]+)"/g)].map((match) => match[1] ?? '');
+  const parts = ['equipment', 'sources', 'fluids', 'reliefPoints', 'loads', 'externalSheets'];
+  const inputs = await Promise.all(parts.map((part) => owen.get(`${base}/changes?part=${part}`)));
+  const values = inputs.flatMap(({ text }) =>
+    [...text.matchAll(/ value="([\d.]+)"/g)].map((match) => match[1] ?? ''),
+  );
   return new Set([...all].filter((one) => !values.includes(one)));
 }
 

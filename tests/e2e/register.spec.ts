@@ -1,5 +1,4 @@
 /* The register and a system's page in a browser: order and filters by links and one form, no script, both truths. */
-import AxeBuilder from '@axe-core/playwright';
 import { type Page } from '@playwright/test';
 import { expect, test } from '../support/fixtures';
 import { signIn } from '../support/sign-in';
@@ -41,19 +40,3 @@ test('a checker before the unseen check sees hatched rows, and an unknown tag is
   const answer = await page.goto('/s/ketterwold/systems/SYS-999');
   expect(answer?.status()).toBe(404);
 });
-
-for (const path of [
-  '',
-  '/register/systems',
-  '/register/relief-points',
-  '/systems/SYS-101',
-  '/systems/SYS-101/basis',
-  '/due',
-  '/methods',
-  '/rulebook',
-])
-  test(`axe finds nothing on ${path === '' ? 'my work' : path}`, async ({ page, server }) => {
-    await enter(page, server.url, 'hedda.brannick@ketterwold.example');
-    await page.goto(`/s/ketterwold${path}`);
-    expect((await new AxeBuilder({ page }).analyze()).violations).toEqual([]);
-  });

@@ -52,7 +52,7 @@ test('a working figure saved in a second tab is not overwritten', async ({ brows
     [first, '220'],
     [second, '224'],
   ] as const) {
-    await tab.goto(`${SITE}/cases/${number}/changes?system=SYS-101`);
+    await tab.goto(`${SITE}/cases/${number}/changes?system=SYS-101&part=sources`);
     const element = tab.locator('details.element').filter({ has: tab.locator(impeller) });
     await element.locator('summary').first().click();
     await element.locator(impeller).fill(value);
@@ -76,7 +76,7 @@ test('an impossible quantity is refused beside its field, and what was typed sta
   const owen = await program(server, 'Owen Tarrant');
   const number = await briefed(owen, 'An impossible figure');
   const page = await pageOf(browser, server, 'Owen Tarrant');
-  await page.goto(`${SITE}/cases/${number}/changes?system=SYS-101`);
+  await page.goto(`${SITE}/cases/${number}/changes?system=SYS-101&part=sources`);
   const field = page.locator('input[name="set.sources/src_p101/pump/impeller"]');
   const element = page.locator('details.element').filter({ has: field });
   await element.locator('summary').first().click();

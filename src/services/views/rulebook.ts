@@ -5,6 +5,7 @@ import { PARAMETERS } from '@domain/rules';
 import { formatNumber } from '@engine/quantity';
 import { rulesOf } from '../case-file';
 import { type Actor, type Ctx } from '../context';
+import { ruleName } from './rule-words';
 
 export type RuleLine = Omit<RuleFacts, 'parameter' | 'inheritable'> & {
   parameter?: { meaning: string; value: string };
@@ -16,7 +17,6 @@ export type RuleLine = Omit<RuleFacts, 'parameter' | 'inheritable'> & {
 };
 export type RulebookView = { rules: RuleLine[]; number: number };
 
-const CAPITALS: Record<string, string> = { mawp: 'MAWP', cdtp: 'CDTP', en: 'EN', z: 'Z', k: 'k' };
 const ASKED: Record<RuleGate, string> = {
   draft: 'draft',
   scenarios: 'scenario analysis',
@@ -27,12 +27,6 @@ const ASKED: Record<RuleGate, string> = {
   'in-kind': 'replacement in kind',
   watch: 'while in force',
 };
-
-function nameOf(code: string): string {
-  const words = code.split('-').map((word) => CAPITALS[word] ?? word);
-  const name = words.join(' ');
-  return code.startsWith('k-') ? name : name.charAt(0).toUpperCase() + name.slice(1);
-}
 
 function limitOf(key: string, given: number | string | boolean | undefined): RuleLine['parameter'] {
   const parameter = PARAMETERS.find((one) => one.key === key);
@@ -59,7 +53,7 @@ export async function rulebookView(ctx: Ctx, actor: Actor): Promise<Result<Ruleb
       const limit = parameter === undefined ? undefined : limitOf(parameter, parameters[parameter]);
       return {
         ...{ code, subject, statement, condition, severity, gate, source },
-        name: nameOf(code),
+        name: ruleName(code),
         asked: ASKED[gate],
         inheritable: rule.inheritable !== false,
         ...(limit ? { parameter: limit } : {}),

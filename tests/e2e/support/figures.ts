@@ -1,6 +1,7 @@
 /* Figures of results as a page shows them, and where they turn up again. */
 
-const cells = /<t[dh][^>]*>([\s\S]*?)<\/t[dh]>/g;
+/** Cells of tables, and the rows of lists that open in place. */
+const cells = /<(t[dh]|summary)[^>]*>([\s\S]*?)<\/\1>/g;
 /** 15 076, 2 993.9, 81.3: digits with thin, narrow or plain spaces between thousands. */
 const numbers =
   /(?<![\w.,/-])\d{1,3}(?:[\s\u2009\u202f\u00a0]\d{3})*(?:\.\d+)?(?![\w])|(?<![\w.,/-])\d+\.\d+(?![\w])|(?<![\w.,/-])\d{4,6}(?![\w])/g;
@@ -25,9 +26,9 @@ export function figuresOf(text: string): Set<string> {
   return new Set(found.filter(tells));
 }
 
-/** The figures in the cells of a page's tables. */
+/** The figures in the cells of a page's tables and in the rows of its lists. */
 export function figuresInTables(html: string): Set<string> {
-  return figuresOf([...html.matchAll(cells)].map((cell) => plainText(cell[1] ?? '')).join(' | '));
+  return figuresOf([...html.matchAll(cells)].map((cell) => plainText(cell[2] ?? '')).join(' | '));
 }
 
 /** Those of `secret` that a body shows, as words or within its marks; a figure of three digits counts in words only. */

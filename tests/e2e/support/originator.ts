@@ -64,11 +64,14 @@ export async function answerAffected(page: Page, reason: string): Promise<number
 
 export type Proposed = { label: string; value: string; from: string; ref: string };
 
-/** Changes figures of one element of the working revision, each with where it is from. */
+/** Changes figures of one element of the working revision, each with where it is from; its section is opened for change first. */
 export async function propose(page: Page, element: string, figures: readonly Proposed[]): Promise<void> {
   const part = page
     .locator('details.element')
     .filter({ has: page.locator(`summary b:text-is("${element}")`) });
+  const section = page.locator('section').filter({ has: part });
+  const change = section.getByRole('link', { name: 'Change these' }).first();
+  if ((await change.count()) > 0) await change.click();
   const found = part.filter({ has: page.getByLabel(figures[0]?.label ?? '', { exact: true }) }).first();
   if ((await found.getAttribute('open')) === null) await found.locator('summary').first().click();
   for (const { label, value, from, ref } of figures) {

@@ -71,6 +71,18 @@ describe('a register', () => {
     } while (cursor);
     expect(seen).toEqual(await tags({ sort: 'use', direction }));
     expect(await tags({ cursor: 'nonsense' })).toHaveLength(4);
+    const back: string[] = [];
+    let before = (await list({ sort: 'use', direction, limit: 3 })).next ?? undefined;
+    expect((await list({ sort: 'use', direction, limit: 3 })).previous).toBeNull();
+    let page = await list({ sort: 'use', direction, limit: 3, ...(before ? { cursor: before } : {}) });
+    before = page.previous ?? undefined;
+    while (before) {
+      page = await list({ sort: 'use', direction, limit: 1, before });
+      expect(page.next).not.toBeNull();
+      back.unshift(...page.rows.map(({ tag }) => tag));
+      before = page.previous ?? undefined;
+    }
+    expect(back).toEqual(seen.slice(0, 3));
   });
 
   test('keeps the results of a hidden document out of rows, order, filters and counts', async () => {

@@ -21,6 +21,7 @@ import { digitsOf, expectsAt } from '../../edit/form/figure';
 import { wordsOfInput } from '../../edit/form/ops';
 import { choicesAt, kindAt } from '../../edit/form/word';
 import { inline } from '../shown';
+import { changeHref } from './addresses';
 import {
   type Offered,
   offeredOfAnswer,
@@ -32,9 +33,9 @@ import {
   shownPaths,
 } from './change-paths';
 import { differenceRows, type DifferenceRowView } from './difference-rows';
-import { type OpenedCase } from './open';
+import { noteLook, type OpenedCase } from './open';
+import { baseOf } from './prose';
 import { shownAny } from './shown-values';
-import { noteLook } from './open';
 import { systemOf, type SystemTab, systemTabs } from './systems';
 
 export type FieldView = {
@@ -53,7 +54,14 @@ export type FieldView = {
   set: boolean;
 };
 export type ElementView = { id: string; tag: string; name: string; changed: number; fields: FieldView[] };
-export type SectionView = { key: string; title: string; elements: ElementView[] };
+export type SectionView = {
+  key: string;
+  title: string;
+  elements: ElementView[];
+  changed: number;
+  /** Its figures are in forms; the others are read, so that a page stays small. */
+  open: boolean;
+};
 export type ChangesView = {
   tabs: SystemTab[];
   system: string;
@@ -139,7 +147,7 @@ function answersOf(doc: Basis): Named[] {
   );
 }
 
-function sectionsOf(of: Of): SectionView[] {
+function sectionsOf(of: Of, part: string | null): SectionView[] {
   const { document: doc } = of;
   const named: [string, string, Named[]][] = [
     [
@@ -194,13 +202,15 @@ function sectionsOf(of: Of): SectionView[] {
       })),
     ],
   ];
-  return named
-    .map(([key, title, elements]) => ({
-      key,
-      title,
-      elements: elements.map((one) => elementOf(of, one)).filter((one) => one.fields.length > 0),
-    }))
+  const sections = named
+    .map(([key, title, list]) => {
+      const elements = list.map((one) => elementOf(of, one)).filter((one) => one.fields.length > 0);
+      return { key, title, elements, changed: elements.reduce((sum, one) => sum + one.changed, 0) };
+    })
     .filter((section) => section.elements.length > 0);
+  const open =
+    sections.find((one) => one.key === part) ?? sections.find((one) => one.changed > 0) ?? sections[0];
+  return sections.map((section) => ({ ...section, open: section === open }));
 }
 
 function documentsOf(of: OpenedCase, one: CaseDocumentFile): Of | undefined {
@@ -213,8 +223,12 @@ function documentsOf(of: OpenedCase, one: CaseDocumentFile): Of | undefined {
   };
 }
 
-/** What changes in one system of a case. UNKNOWN for a system that the case does not hold. */
-export async function changesView(of: OpenedCase, tag: string | null): Promise<Result<ChangesView>> {
+/** What changes in one system of a case, with one section of its document ready to be changed. UNKNOWN for a system that the case does not hold. */
+export async function changesView(
+  of: OpenedCase,
+  tag: string | null,
+  part: string | null = null,
+): Promise<Result<ChangesView>> {
   const found = systemOf(of, tag);
   if (!found.ok) return found;
   const one = found.value;
@@ -238,10 +252,10 @@ export async function changesView(of: OpenedCase, tag: string | null): Promise<R
         ? differenceRows(
             one.before.body,
             one.after.body,
-            (change) => `#${encodeURIComponent(change.path)}`,
+            (change) => changeHref(baseOf(of), one.document.tag, change.path),
             of.hidden,
           )
         : [],
-    sections: both ? sectionsOf(both) : [],
+    sections: both ? sectionsOf(both, part) : [],
   });
 }

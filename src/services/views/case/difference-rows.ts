@@ -1,7 +1,10 @@
 /* Differences of two documents as rows of a table: where, old, now, unit, origin; texts by words. */
-import { type Basis, capital, isRich } from '@domain/basis';
+import { type Basis, capital, isFigure, isKnown, isRich } from '@domain/basis';
 import { type Change, difference, type WordPart } from '@domain/difference';
 import { HIDDEN_WORD, maskChange } from '@domain/hidden';
+import { madeOfWords } from '../made-of';
+import { type Shown } from '../shown';
+import { toldApart } from '../told-apart';
 import { shownAny } from './shown-values';
 
 export type RowWords = { text: string; kind: 'same' | 'removed' | 'added' }[];
@@ -52,14 +55,25 @@ function textChange(change: Change): boolean {
   return isRich(change.old) || isRich(change.now);
 }
 
+/** Two figures apart by less than is printed get more digits, their typed ones left aside. */
+function apart(change: Change, old: Shown | undefined, now: Shown | undefined): [string?, string?] {
+  const [one, two] = [change.old, change.now];
+  if (!old || !now || old.text !== now.text || old.unit !== now.unit) return [];
+  if (!isFigure(one) || !isFigure(two) || !isKnown(one) || !isKnown(two)) return [];
+  return one.value === two.value ? [] : toldApart({ ...one, unit: '-' }, { ...two, unit: '-' });
+}
+
 function rowOf(change: Change, base: Basis, ours: Basis, href: string): DifferenceRowView {
+  const made = madeOfWords(base, ours, change.path);
   const old = change.old === undefined ? undefined : shownAny(base, change.old);
   const now = change.now === undefined ? undefined : shownAny(ours, change.now);
   const unit = now?.unit ?? old?.unit;
   const sameUnit = old?.unit === undefined || now?.unit === undefined || old.unit === now.unit;
   const inline = (shown: typeof old) =>
     shown && !sameUnit && shown.unit !== undefined ? `${shown.text} ${shown.unit}` : shown?.text;
-  const [oldText, nowText] = [inline(old), inline(now)];
+  const [oldApart, nowApart] = apart(change, old, now);
+  const oldText = made === undefined ? (oldApart ?? inline(old)) : 'the inputs of then';
+  const nowText = made ?? nowApart ?? inline(now);
   return {
     path: change.path,
     section: SECTION_WORDS[change.path.split('/')[0] ?? ''] ?? 'System',

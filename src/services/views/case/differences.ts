@@ -1,6 +1,6 @@
 /* Differences of a case: field by field from the base to the working revision, results that moved, and what a carry-over would meet. */
 import { capital, describePath, type Basis } from '@domain/basis';
-import { can, scenarioName } from '@domain/case';
+import { can } from '@domain/case';
 import { movedResults, type MovedResult } from '@domain/difference';
 import { groupLabel } from '@domain/projections';
 import { ok, type Result } from '@domain/result';
@@ -8,8 +8,11 @@ import { formatNumber, type Q } from '@engine/quantity';
 import { type CaseDocumentFile, onFile } from '../../case-file';
 import { whoOf } from '../../context';
 import { mergeOnto } from '../../stage/carry-over';
+import { OUTPUT_WORDS, resultLabel } from '../result-label';
 import { inline, shownQ } from '../shown';
+import { toldApart } from '../told-apart';
 import { newKey } from '../../form-key';
+import { changeHref } from './addresses';
 import { differenceRows, type DifferenceRowView } from './difference-rows';
 import { noteLook, type OpenedCase } from './open';
 import { shownAny } from './shown-values';
@@ -36,51 +39,20 @@ export type DifferencesView = {
   why?: string;
 };
 
-const SHEET = /^sheets\/(\w+):([^#]+)#(\w+)$/;
-const KINDS: Readonly<Record<string, string>> = {
-  limit: 'limit',
-  load: 'load',
-  size: 'size',
-  rated: 'rated capacity',
-  inlet: 'inlet line',
-  outlet: 'back pressure',
-  cold: 'cold setting',
-  force: 'reaction force',
-};
-const OUTPUTS: Readonly<Record<string, string>> = {
-  relief_load: 'relief load',
-  A_required: 'required area',
-  P1: 'relieving pressure',
-  use: 'used of the installed area',
-  total: 'total back pressure',
-  rated: 'rated capacity',
-  inletLoss: 'inlet loss',
-  builtUp: 'built-up back pressure',
-  required: 'required area',
-  installed: 'installed area',
-  verdict: 'verdict',
-};
+const SHEET = /^sheets\/([^#]+)#(\w+)$/;
 /** Results that decide; the others are steps on the way and stand on their sheets. */
 const SHOWN =
   /^(?:sheets\/.*#(?:relief_load|A_required|P1|use|verdict)|groups\/.*#(?:use|required|installed)|points\/.*#(?!verdict)\w+)$/;
 
-function sheetName(doc: Basis, kind: string, subject: string, output: string): string {
-  const [id = ''] = subject.split('/');
-  const scenario = doc.scenarios.find((one) => one.id === id);
-  const point = doc.reliefPoints.find((one) => one.id === id);
-  const of = scenario ? scenarioName(scenario) : (point?.tag ?? id);
-  return `${of}, ${OUTPUTS[output] ?? `${KINDS[kind] ?? kind}, ${output.replaceAll('_', ' ')}`}`;
-}
-
 function resultName(doc: Basis, path: string): string {
   const sheet = SHEET.exec(path);
-  if (sheet) return sheetName(doc, sheet[1] ?? '', sheet[2] ?? '', sheet[3] ?? '');
+  if (sheet) return resultLabel(doc, sheet[1] ?? '', sheet[2] ?? '');
   const [place = '', output] = path.split('#');
   const [list, id = ''] = place.split('/');
   const group = list === 'groups' ? doc.groups.find((one) => one.id === id) : undefined;
   const point = list === 'points' ? doc.reliefPoints.find((one) => one.id === id) : undefined;
   const name = group ? groupLabel(doc, group) : (point?.tag ?? capital(describePath(doc, place).label));
-  return `${name}, ${output === undefined ? 'verdict' : (OUTPUTS[output] ?? output.replaceAll('_', ' '))}`;
+  return `${name}, ${output === undefined ? 'verdict' : (OUTPUT_WORDS[output] ?? output.replaceAll('_', ' '))}`;
 }
 
 function valueWords(value: Q | string | undefined): string {
@@ -88,9 +60,13 @@ function valueWords(value: Q | string | undefined): string {
   return typeof value === 'string' ? value.replaceAll('-', ' ') : inline(shownQ(value));
 }
 
-function resultWords(path: string, value: Q | string | undefined): string {
-  if (!path.endsWith('#use') || value === undefined || typeof value === 'string') return valueWords(value);
-  return `${formatNumber(value.value * 100, 1)}\u00a0%`;
+function resultWords({ path, old, now }: MovedResult): [string, string] {
+  const both = (value: Q | string | undefined): value is Q => typeof value === 'object';
+  if (!both(old) || !both(now)) return [valueWords(old), valueWords(now)];
+  if (!path.endsWith('#use')) return toldApart(old, now);
+  const percent = (value: Q): Q => ({ value: value.value * 100, unit: '%' });
+  const words = (value: Q) => `${formatNumber(value.value * 100, 1)}\u00a0%`;
+  return words(old) === words(now) ? toldApart(percent(old), percent(now)) : [words(old), words(now)];
 }
 
 function shiftWords(shift: number | undefined): string {
@@ -99,10 +75,11 @@ function shiftWords(shift: number | undefined): string {
 }
 
 function movedRow(doc: Basis, one: MovedResult): MovedRow {
+  const [old, now] = resultWords(one);
   return {
     what: resultName(doc, one.path),
-    old: resultWords(one.path, one.old),
-    now: resultWords(one.path, one.now),
+    old,
+    now,
     shift: one.verdict ? '' : shiftWords(one.shift),
     strong: one.verdict,
   };
@@ -161,7 +138,7 @@ export async function differencesView(of: OpenedCase, tag: string | null): Promi
     const [list, id = ''] = change.path.split('/');
     return list === 'scenarios'
       ? `${base}/scenarios${query}#${encodeURIComponent(id)}`
-      : `${base}/changes${query}#${encodeURIComponent(change.path)}`;
+      : changeHref(base, one.document.tag, change.path);
   };
   const rows =
     one.before && one.after ? differenceRows(one.before.body, one.after.body, hrefOf, of.hidden) : [];

@@ -19,6 +19,7 @@ import { untilNextWrite } from '@data/memo';
 import { domainSeats, nameIn, onFile, type CaseFile } from '../../case-file';
 import { today, whoOf, type Actor, type Ctx } from '../../context';
 import { contextOf } from '../../stage/stage-act';
+import { addressOf } from './addresses';
 import { idleActs } from './idle';
 import { type OpenedCase, openCase } from './open';
 import { cellsOf } from './title-cells';
@@ -154,7 +155,7 @@ function gateView(of: OpenedCase, points: readonly OpenPoint[]): GateView | null
     points: points.map((one) => ({
       sentence: one.sentence,
       code: one.code,
-      href: `/s/${of.file.site.slug}/${one.where}`,
+      href: addressOf(of.file, one.where),
     })),
   };
 }

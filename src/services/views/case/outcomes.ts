@@ -4,6 +4,7 @@ import { maskOutcome } from '@domain/hidden';
 import { type Outcome } from '@domain/rulebook';
 import { type CaseDocumentFile } from '../../case-file';
 import { dayWords } from '../days';
+import { type RuleWords, ruleWords } from '../rule-words';
 import { nameOf } from './acts';
 import { noteLook, type OpenedCase } from './open';
 import { placeOf } from './places';
@@ -11,6 +12,8 @@ import { proseOf, type Prose } from './prose';
 
 export type OutcomeView = {
   code: string;
+  /** The rule in words, and where the rulebook states it. */
+  rule: RuleWords;
   severity: Outcome['severity'];
   subject: string;
   sentence: string;
@@ -70,6 +73,7 @@ export function outcomeView(
   const outcome = of.hidden ? maskOutcome(raw) : raw;
   return {
     code: outcome.code,
+    rule: ruleWords(of.file.site.slug, outcome.code),
     severity: outcome.severity,
     subject: subjectOf(of, one, outcome),
     sentence: outcome.sentence.replace(new RegExp(`^${escaped(outcome.tag)}:? `), ''),

@@ -4,6 +4,7 @@ import { placeOfPath } from '@domain/case';
 import { maskEvaluation } from '@domain/hidden';
 import { scenarioLabel, sheetLabel } from '@domain/projections';
 import { type CaseDocumentFile } from '../../case-file';
+import { addressOf } from './addresses';
 import { type OpenedCase } from './open';
 import { baseOf, plainOf, sheetHref } from './prose';
 
@@ -43,7 +44,7 @@ function inDocument(of: OpenedCase, one: CaseDocumentFile, path: string): Place 
   const where = facts ? placeOfPath(of.facts, facts, path) : '';
   return {
     label: several + plainOf(of, describePath(one.after?.body ?? {}, path).label),
-    href: `/s/${of.file.site.slug}/${where}`,
+    href: addressOf(of.file, where),
   };
 }
 

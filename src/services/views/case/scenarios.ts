@@ -11,6 +11,7 @@ import { type CaseDocumentFile, onFile } from '../../case-file';
 import { whoOf } from '../../context';
 import { type Evaluated } from '../../evaluate-document';
 import { keptWith } from '@data/memo';
+import { ruleName } from '../rule-words';
 import { areaUnit, loadUnit, rowFigures, scaleOf, type Scale } from './scenario-figures';
 import { answerViews, type AnswerView, calcChoices, type Choices } from './scenario-answers';
 import { noteLook, type OpenedCase } from './open';
@@ -33,6 +34,8 @@ export type LineView = {
 };
 export type OutcomeView = {
   code: string;
+  /** The rule in words. */
+  rule: string;
   severity: 'stop' | 'justify' | 'note';
   subject: string;
   sentence: string;
@@ -112,6 +115,7 @@ function outcomeView(
   const justified = facts ? isJustified(outcome, facts, least) : false;
   return {
     code,
+    rule: ruleName(code),
     severity,
     subject: outcome.tag,
     sentence,

@@ -13,6 +13,7 @@ import { lettersOf } from '@domain/projections/read';
 import { convert, formatNumber, fromSI, toSI, unitLabel } from '@engine/quantity';
 import { type CaseDocumentFile } from '../../case-file';
 import { type Evaluated } from '../../evaluate-document';
+import { changeHref } from './addresses';
 
 /** A figure before and after; `moved` when a reader would see another. */
 export type Pair = { before: string; after: string; moved: boolean; worse: boolean };
@@ -116,7 +117,7 @@ function changedIn(one: CaseDocumentFile, point: ReliefPoint): boolean {
 }
 
 /** One line for each relief point of a system. */
-export function deviceLines(one: CaseDocumentFile, href: string): DeviceLine[] {
+export function deviceLines(one: CaseDocumentFile, base: string): DeviceLine[] {
   const { before, after } = one;
   return (after?.body.reliefPoints ?? []).map((point) => {
     const unit = quantityOf(point.set)?.unit ?? 'bar_g';
@@ -127,7 +128,7 @@ export function deviceLines(one: CaseDocumentFile, href: string): DeviceLine[] {
     return {
       system: one.document.tag,
       tag: point.tag,
-      href: `${href}#reliefPoints/${point.id}`,
+      href: changeHref(base, one.document.tag, `reliefPoints/${point.id}`),
       verdict: after?.evaluation.points[point.id]?.verdict ?? 'not-sized',
       verdictBefore: before?.evaluation.points[point.id]?.verdict ?? null,
       use,

@@ -83,7 +83,7 @@ function outcomesOf(of: OpenedCase): { justified: OutcomeView[]; inherited: Outc
 
 function figuresOf(of: OpenedCase): Pick<SummaryView, 'lead' | 'devices' | 'unmoved'> {
   if (of.hidden) return { lead: null, devices: [], unmoved: [] };
-  const lines = of.file.documents.flatMap((one) => deviceLines(one, `${baseOf(of)}/changes`));
+  const lines = of.file.documents.flatMap((one) => deviceLines(one, baseOf(of)));
   const first = of.file.documents[0];
   return {
     lead: (first && leadOf(first, (key) => sheetHref(of, first, key))) ?? null,

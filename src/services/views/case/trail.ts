@@ -1,5 +1,5 @@
 /* The record of one case: who did what and when, from what to what, and why. */
-import { getAt } from '@domain/basis';
+import { getAt, type Origin } from '@domain/basis';
 import { can, ROLE_WORDS, type Role, STAGE_WORDS, type Stage } from '@domain/case';
 import { fail, ok, type Result } from '@domain/result';
 import { plainText } from '@domain/text';
@@ -8,6 +8,8 @@ import { readTrail, type TrailRow } from '@data/trail';
 import { onFile } from '../../case-file';
 import { whoOf } from '../../context';
 import { formatQuantity, type Q } from '@engine/quantity';
+import { originWords } from '../shown';
+import { toldApart } from '../told-apart';
 import { noteLook, type OpenedCase } from './open';
 import { placeOf } from './places';
 import { TRAIL_WORDS } from './trail-words';
@@ -36,6 +38,9 @@ type Fields = Record<string, unknown>;
 const isFields = (value: unknown): value is Fields =>
   typeof value === 'object' && value !== null && !Array.isArray(value);
 
+const isQuantity = (value: unknown): value is Q & Fields =>
+  isFields(value) && typeof value['value'] === 'number' && typeof value['unit'] === 'string';
+
 /** A value of a change in words; a whole element is called by its tag or name. */
 function words(value: unknown): string | undefined {
   if (value === undefined || value === null) return undefined;
@@ -46,12 +51,23 @@ function words(value: unknown): string | undefined {
   if (Array.isArray(value)) return `${String(value.length)} ${value.length === 1 ? 'entry' : 'entries'}`;
   if (!isFields(value)) return undefined;
   if (value['type'] === 'doc') return plainText(value as Parameters<typeof plainText>[0]);
-  if (typeof value['value'] === 'number' && typeof value['unit'] === 'string')
-    return formatQuantity(value as Q);
+  if (isQuantity(value)) return formatQuantity(value);
   const name = ['tag', 'name', 'title', 'text', 'word', 'use', 'unknown', 'key']
     .map((key) => value[key])
     .find((each) => typeof each === 'string');
   return typeof name === 'string' ? name : 'an entry';
+}
+
+/** Old and new value so that a reader sees what moved: enough digits, or the origin where the figure stood. */
+function pairOf(old: unknown, now: unknown): [string | undefined, string | undefined] {
+  if (isQuantity(old) && isQuantity(now)) {
+    if (old.value !== now.value || old.unit !== now.unit) return toldApart(old, now);
+    const figure = formatQuantity(now);
+    const from = (one: Fields) => originWords(one['origin'] as Origin | undefined) ?? 'no origin';
+    return [`${figure}, ${from(old)}`, from(now)];
+  }
+  const [one, two] = [words(old), words(now)];
+  return one !== undefined && one === two ? [undefined, `${two}, edited`] : [one, two];
 }
 
 function whereOf(of: OpenedCase, row: TrailRow, path: string): string {
@@ -71,7 +87,7 @@ function whereOf(of: OpenedCase, row: TrailRow, path: string): string {
 
 function lineOf(of: OpenedCase, row: TrailRow, names: ReadonlyMap<string, string>): TrailLine {
   const changes = row.body.changes.slice(0, SHOWN).map((change): TrailChange => {
-    const [old, now] = [words(change.old), words(change.new)];
+    const [old, now] = pairOf(change.old, change.new);
     return {
       where: whereOf(of, row, change.path),
       ...(old === undefined ? {} : { old }),

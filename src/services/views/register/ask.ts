@@ -18,6 +18,8 @@ export type Ask = {
   sort: string;
   descending: boolean;
   after: string;
+  /** The row before which the page ends; counts before `after`. */
+  before: string;
   /** Number of the first row, for "51–100 of 212". */
   first: number;
   figures: Figures;
@@ -31,6 +33,7 @@ export function readAsk(name: RegisterName, query: URLSearchParams): Ask {
   const first = Number.parseInt(get('n'), 10);
   const figures = get('figures');
   const after = get('after');
+  const before = get('before');
   return {
     text: get('q').trim(),
     unit: get('unit'),
@@ -39,7 +42,8 @@ export function readAsk(name: RegisterName, query: URLSearchParams): Ask {
     sort: hasColumn(name, column) ? column : 'tag',
     descending: hasColumn(name, column) && sort.startsWith('-'),
     after,
-    first: after !== '' && first > 1 && first < 1e6 ? first : 1,
+    before,
+    first: after + before !== '' && first > 1 && first < 1e6 ? first : 1,
     figures: figures === 'SI' || figures === 'US' ? figures : 'entered',
   };
 }
@@ -54,6 +58,7 @@ export function queryOf(ask: Ask, actor: Actor, hidden: Hidden, kindColumn: stri
     text: ask.text,
     limit: PAGE_SIZE,
     ...(ask.after === '' ? {} : { cursor: ask.after }),
+    ...(ask.before === '' ? {} : { before: ask.before }),
     filters: {
       ...(ask.unit === '' ? {} : { unitId: ask.unit }),
       ...(ask.kind === '' ? {} : { [kindColumn]: ask.kind }),

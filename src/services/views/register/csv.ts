@@ -12,6 +12,7 @@ import {
 import { type Actor, type Ctx } from '../../context';
 import { hiddenOf } from '../../hidden-view';
 import { queryOf, readAsk } from './ask';
+import { setUnitWords } from './figures';
 
 const CAUTION =
   'An aid to qualified engineers. Not a substitute for the governing code, the manufacturer’s certified data or a licensed engineer’s judgement. Check the edition in force locally.';
@@ -58,7 +59,7 @@ const POINT_COLUMNS: readonly Column<Listed<PointRow>>[] = [
   ['Kind', (row) => row.kind],
   ['Size', (row) => row.letter],
   ['Set', (row) => plain(row.setSi, row.setUnit)],
-  ['Set unit', (row) => label(row.setUnit)],
+  ['Set unit', (row) => (row.setUnit === null ? null : setUnitWords(row.setUnit))],
   ['Area', (row) => plain(row.areaSi, row.areaUnit)],
   ['Area unit', (row) => label(row.areaUnit)],
   ['Governing scenario', (row) => row.governingName],
@@ -76,7 +77,7 @@ async function everyRow<N extends RegisterName>(
   search: URLSearchParams,
   kindColumn: string,
 ): Promise<Listed<RegisterRows[N]>[]> {
-  const ask = { ...readAsk(name, search), after: '' };
+  const ask = { ...readAsk(name, search), after: '', before: '' };
   const query = { ...queryOf(ask, actor, await hiddenOf(ctx, actor), kindColumn), limit: 2_000 };
   const rows: Listed<RegisterRows[N]>[] = [];
   let next: string | null = '';

@@ -26,9 +26,17 @@ const DECIMALS: Readonly<Record<string, number>> = {
   in2: 3,
   bar_g: 2,
   bar_abs: 2,
+  bar: 2,
   mbar_g: 1,
+  mbar_abs: 1,
+  mbar: 1,
   psig: 1,
+  psia: 1,
+  psi: 1,
   kPa_g: 1,
+  kPa_abs: 1,
+  kPa: 1,
+  inH2O: 2,
 };
 
 /** A register's SI figure in the unit of its basis, or in that of the system asked for; null stays nothing. */
@@ -37,6 +45,18 @@ export function cellOf(si: number | null, entered: string | null, figures: Figur
   const dimension = dimensionOf(entered);
   const unit = figures === 'entered' || !dimension ? entered : displayUnit(dimension, figures);
   return { text: formatNumber(fromSI(si, unit).value, DECIMALS[unit]), unit: unitLabel(unit) };
+}
+
+/** The unit of a set: one without a datum is a vacuum below the atmosphere, and says so. */
+export function setUnitWords(unit: string): string {
+  return dimensionOf(unit) === 'pressure-difference' ? `${unitLabel(unit)} vacuum` : unitLabel(unit);
+}
+
+/** A set pressure or set vacuum. */
+export function setCellOf(si: number | null, entered: string | null, figures: Figures): Cell | undefined {
+  const cell = cellOf(si, entered, figures);
+  const vacuum = entered !== null && setUnitWords(entered).endsWith(' vacuum');
+  return cell && vacuum ? { ...cell, unit: `${cell.unit} vacuum` } : cell;
 }
 
 type SizedColumns = {

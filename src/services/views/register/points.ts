@@ -6,7 +6,7 @@ import { type Actor, type Ctx } from '../../context';
 import { type Hidden, hiddenOf } from '../../hidden-view';
 import { aroundOf, type CaseLink, openCaseLinks, seenDocuments } from './around';
 import { type Ask, queryOf, readAsk } from './ask';
-import { type Cell, cellOf, sizedOf } from './figures';
+import { type Cell, setCellOf, sizedOf } from './figures';
 import { remembered } from './remembered';
 import { approvedCases, headed, pageOf, type RegisterView, type SystemLine, type Waiting } from './systems';
 
@@ -32,7 +32,7 @@ type Of = {
 
 function lineOf(row: Listed<PointRow>, site: string, ask: Ask, of: Of): PointLine {
   const waiting = of.waiting.get(`${row.documentId} ${row.elementId}`);
-  const set = cellOf(row.setSi, row.setUnit, ask.figures);
+  const set = setCellOf(row.setSi, row.setUnit, ask.figures);
   const system = `/s/${site}/systems/${encodeURIComponent(row.systemTag ?? '')}`;
   return {
     ...sizedOf(row, ofGroup(row), ask.figures),

@@ -33,8 +33,9 @@ export type RegisterView<L> = {
   matching: number;
   /** Units that stand in the heads of their columns. */
   heads: { set?: string; required?: string; installed?: string };
-  /** The address of the next page, and of the first one when this is a later one. */
+  /** The addresses of the pages around this one, and of the first when this is a later one. */
   next?: string;
+  previous?: string;
   start?: string;
   csv: string;
   clear: string;
@@ -50,19 +51,26 @@ export function pageOf<L>(
   path: string,
   ask: Ask,
   around: Around,
-  found: { rows: readonly unknown[]; total: number; next: string | null },
+  found: { rows: readonly unknown[]; total: number; next: string | null; previous: string | null },
 ): Omit<RegisterView<L>, 'rows' | 'heads'> {
-  const from = { ...ask, after: '' };
-  const n = String(ask.first + PAGE_SIZE);
+  const from = { ...ask, after: '', before: '' };
+  const first = found.previous === null ? 1 : ask.first;
+  const n = String(first + PAGE_SIZE);
+  const back = String(Math.max(1, first - PAGE_SIZE));
   return {
     path,
-    ask,
+    ask: { ...ask, first },
     around,
     matching: found.total,
     csv: addressOf(from, `${path}.csv`),
     clear: path,
     ...(found.next === null ? {} : { next: addressOf(from, path, { after: found.next, n }) }),
-    ...(ask.after === '' ? {} : { start: addressOf(from, path) }),
+    ...(found.previous === null
+      ? {}
+      : {
+          previous: addressOf(from, path, { before: found.previous, n: back }),
+          start: addressOf(from, path),
+        }),
   };
 }
 

@@ -3,6 +3,7 @@ import { type Basis, plainText, STATUSES, type Status } from '@domain/basis';
 import { scenarioLabel } from '@domain/projections';
 import { clearedBy, type Outcome } from '@domain/rulebook';
 import { SCENARIOS } from '@domain/scenarios';
+import { type RuleWords, ruleWords } from '../rule-words';
 import { type Shown, shownFigure } from '../shown';
 import { baseOf } from './frame';
 import { type OpenedSystem, type Seen } from './open';
@@ -158,7 +159,7 @@ export type OutcomeView = {
   severity: Outcome['severity'];
   subject: string;
   sentence: string;
-  href: string;
+  rule: RuleWords;
   inherited?: boolean;
   justification?: { text: string; by: string };
 };
@@ -176,7 +177,7 @@ export function outcomesOf(of: OpenedSystem, seen: Seen, people: ReadonlyMap<str
         severity: one.severity,
         subject: one.tag,
         sentence: one.sentence,
-        href: `/s/${of.actor.site.slug}/rulebook#${one.code}`,
+        rule: ruleWords(of.actor.site.slug, one.code),
         ...(one.inherited ? { inherited: true } : {}),
         ...(cleared
           ? {

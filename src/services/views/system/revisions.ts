@@ -1,13 +1,16 @@
 /* Revisions of a system: the list, and what differs between two of them, in words and in results. */
-import { sheetLabel } from '@domain/projections';
 import { type Basis, isFigure, isFields, isRich, plainText } from '@domain/basis';
 import { type Change, difference, movedResults } from '@domain/difference';
 import { maskChange, maskProse } from '@domain/hidden';
 import { fail, ok, type Result } from '@domain/result';
+import { type Q } from '@engine/quantity';
 import { type RevisionRow } from '@data/revisions';
 import { signaturesOfCase } from '@data/signatures';
 import { dayAt } from '../days';
+import { madeOfWords } from '../made-of';
+import { resultLabel } from '../result-label';
 import { inline, originWords, shownFigure } from '../shown';
+import { toldApart } from '../told-apart';
 import { baseOf } from './frame';
 import { type OpenedSystem, type Seen, seenOf } from './open';
 
@@ -115,11 +118,12 @@ function valueWords(value: unknown): string | undefined {
 const KINDS = { moved: 'changed', added: 'added', removed: 'removed', order: 'moved' } as const;
 const WORDS = { equal: 'same', added: 'added', removed: 'removed' } as const;
 
-function rowOf(change: Change, hidden: boolean): DifferenceLine {
+function rowOf(change: Change, sides: { from: Basis; to: Basis }, hidden: boolean): DifferenceLine {
   const kind = KINDS[change.kind];
   if (hidden) return { where: maskChange(change).label, kind, hidden: true };
-  const old = change.kind === 'order' ? undefined : valueWords(change.old);
-  const now = change.kind === 'order' ? undefined : valueWords(change.now);
+  const made = madeOfWords(sides.from, sides.to, change.path);
+  const old = change.kind === 'order' ? undefined : made ? 'the inputs of then' : valueWords(change.old);
+  const now = change.kind === 'order' ? undefined : (made ?? valueWords(change.now));
   const origin = isFigure(change.now) && 'origin' in change.now ? originWords(change.now.origin) : undefined;
   return {
     where: change.label,
@@ -136,23 +140,16 @@ function rowOf(change: Change, hidden: boolean): DifferenceLine {
 
 /** The results that a difference tells; everything else stands on the sheets. */
 const TOLD = /^sheets\/.*#(A_required|relief_load|relieving_pressure|MAAP|verdict|CDTP)$/;
-const OUTPUTS: Record<string, string> = {
-  A_required: 'required area',
-  relief_load: 'load',
-  relieving_pressure: 'relieving pressure',
-  MAAP: 'allowed pressure',
-  verdict: 'verdict',
-  CDTP: 'test pressure',
-};
-
 function movedRows(from: Seen, to: Seen): DifferenceLine[] {
   if (!from.evaluation || !to.evaluation) return [];
   const shown = movedResults(from.evaluation, to.evaluation).filter((one) => TOLD.test(one.path));
   return shown.map((moved) => {
     const [key = '', output = ''] = moved.path.replace(/^sheets\//, '').split('#');
-    const where = `${sheetLabel(to.body, key)}: ${OUTPUTS[output] ?? output}`;
-    const old = valueWords(moved.old);
-    const now = valueWords(moved.now);
+    const where = resultLabel(to.body, key, output);
+    const both = typeof moved.old === 'object' && typeof moved.now === 'object';
+    const [old, now] = both
+      ? toldApart(moved.old as Q, moved.now as Q)
+      : [valueWords(moved.old), valueWords(moved.now)];
     return {
       where,
       kind: 'changed',
@@ -183,11 +180,12 @@ export async function differenceOf(
   const other = await sideOf(of, to);
   if (!other.ok) return other;
   const { barometer } = of.actor.site;
-  const changes = difference(one.value.body satisfies Basis, other.value.body satisfies Basis, { barometer });
+  const sides = { from: one.value.body, to: other.value.body };
+  const changes = difference(sides.from, sides.to, { barometer });
   return ok({
     from: from === 'approved' ? 'Approved' : `Rev ${from}`,
     to: to === 'approved' ? 'Approved' : `Rev ${to}`,
-    rows: changes.map((change) => rowOf(change, of.hidden)),
+    rows: changes.map((change) => rowOf(change, sides, of.hidden)),
     moved: movedRows(one.value, other.value),
     hidden: of.hidden,
   });
