@@ -2,11 +2,14 @@
 import { can } from '@domain/case';
 import { catalogHash, ENGINE } from '@domain/evaluate';
 import { fail, ok, type Result } from '@domain/result';
+import { scenariosServedBy } from '@domain/scenarios';
 import { type Method, methodById, METHODS } from '@engine/catalog';
 import { type Asker } from '../calculations';
 import { checkTotals, methodChecks, type MethodChecks } from './method-checks';
 
 export type MethodView = Omit<Method, 'work'>;
+/** A method on its page: its check values, the engine, and the names of the standard scenarios whose load it serves. */
+export type MethodPage = MethodView & { checks: MethodChecks; engine: string; serves: string[] };
 /** A method in the list: its check values counted, and the worst deviation of those that should reproduce. */
 export type MethodLine = MethodView & { values: number; agreeing: number; worst?: number };
 export type MethodGroup = { key: string; name: string; methods: MethodLine[]; values: number; worst: number };
@@ -89,8 +92,9 @@ export function methodList(who: Asker): Result<{ methods: MethodView[] }> {
 }
 
 /** One method by its id, with its check values. */
-export function methodView(id: string): Result<MethodView & { checks: MethodChecks; engine: string }> {
+export function methodView(id: string): Result<MethodPage> {
   const method = methodById(id);
   if (!method) return fail('UNKNOWN', `There is no method ${id.slice(0, 60)}.`);
-  return ok({ ...viewOf(method), checks: methodChecks(method.topic), engine: ENGINE });
+  const serves = scenariosServedBy(method.id).map(({ name }) => name);
+  return ok({ ...viewOf(method), checks: methodChecks(method.topic), engine: ENGINE, serves });
 }

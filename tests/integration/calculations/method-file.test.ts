@@ -57,6 +57,9 @@ describe('the method file', () => {
       expect.stringMatching(/%|none/) as string,
       'within 0.1 %',
     ]);
+    expect(methodView('f.settle-out')).toMatchObject({
+      value: { serves: ['Compressor trip, settle-out, surge or stage imbalance'] },
+    });
     expect(methodView('z.none')).toMatchObject({ ok: false, problem: { code: 'UNKNOWN' } });
   });
 
