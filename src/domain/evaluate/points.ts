@@ -1,14 +1,13 @@
 /* Sheets and results of each relief point: rated capacity, inlet loss, back pressures, cold setting, force. */
 import { type ExternalSheet, quantityOf, type ReliefPoint } from '@domain/basis';
-import { methodById } from '@engine/catalog';
-import { convert, fromSI, type Q, toSI } from '@engine/quantity';
+import { convert, dimensionOf, fromSI, type Q, toSI } from '@engine/quantity';
 import { externalAsSheet, externalFigure, externalsFor } from './external';
 import { pointBackPressure } from './back-pressure';
 import { worstOf } from './groups';
-import { fluidValues } from './implicit';
-import { actualArea } from './installed';
+import { makeLines } from './lines';
 import { outputOf, workedSheet, type Made } from './sheets';
 import { type Evaluation, type PointResult, type Sheet } from './types';
+import { makeVents } from './vents';
 import { codeOf, type CredibleAnswer, limitingSide, type Work } from './work';
 
 const ABOUTS = ['rated', 'inlet', 'outlet', 'force'] as const;
@@ -27,14 +26,15 @@ export function differenceUnit(gauge: string): string {
 
 /** Makes the sheets of every relief point and its results. */
 export function pointResults(work: Work, groups: Evaluation['groups']): Evaluation['points'] {
+  const governed = work.basis.reliefPoints.map((point) => ({ point, ca: governingOf(work, groups, point) }));
+  for (const { point } of governed) {
+    for (const about of ABOUTS) makeExternal(work, about, point);
+    makeCold(work, point);
+  }
+  makeVents(work);
+  makeLines(work, governed);
   return Object.fromEntries(
-    work.basis.reliefPoints.map((point) => {
-      const governing = governingOf(work, groups, point);
-      for (const about of ABOUTS) makeExternal(work, about, point);
-      if (!work.sheets[`rated:${point.id}`]) makeRated(work, point, governing);
-      makeCold(work, point);
-      return [point.id, resultOf(work, groups, point)];
-    }),
+    work.basis.reliefPoints.map((point) => [point.id, resultOf(work, groups, point)]),
   );
 }
 
@@ -59,38 +59,6 @@ function makeExternal(work: Work, about: ExternalSheet['about'], point: ReliefPo
   if (!sheet) return;
   const key = about === 'outlet' ? `outlet:${point.id}/own` : `${about}:${point.id}`;
   work.sheets[key] = externalAsSheet(work, key, sheet);
-}
-
-/** Rated capacity from the actual area and the certified coefficient at 10 % overpressure (or its floor), in the governing fluid. */
-function makeRated(work: Work, point: ReliefPoint, ca: CredibleAnswer | undefined): void {
-  const method = methodById('a.rated-capacity');
-  const set = quantityOf(point.set);
-  const coefficient = quantityOf(point.k?.gas);
-  const area = actualArea(point);
-  const fluid = ca?.answer.fluid === undefined ? undefined : work.lookup.fluids.get(ca.answer.fluid);
-  if (!method || !set || !coefficient || area === undefined || !fluid) return;
-  if (fluid.phase !== 'gas' && fluid.phase !== 'vapour') return;
-  const at = `reliefPoints/${point.id}`;
-  const floor = work.basis.units === 'US' ? 3 * 6894.757293168 : 20e3;
-  const p1 = toSI(set) + Math.max(0.1 * toSI(set), floor) + toSI(work.context.barometer);
-  const back = pointBackPressure(work, point);
-  const made: Made = {
-    inputs: {
-      A_actual: fromSI(area, 'mm2'),
-      K_certified: coefficient,
-      P1: fromSI(p1, 'kPa_abs'),
-      P2: fromSI(back.pa, 'kPa_abs'),
-    },
-    from: { A_actual: `${at}/orifice/actual`, K_certified: `${at}/k/gas`, P1: `${at}/set`, P2: back.path },
-  };
-  const values = fluidValues(work, fluid);
-  for (const name of ['T', 'Z', 'M', 'k']) {
-    const found = values[name]?.();
-    if (!found) return;
-    made.inputs[name] = found.value;
-    made.from[name] = found.path;
-  }
-  work.sheets[`rated:${point.id}`] = workedSheet(`rated:${point.id}`, method.id, undefined, made, at);
 }
 
 /** The cold setting by h.set-tolerance, for spring valves with a set pressure. */
@@ -161,7 +129,7 @@ function resultOf(work: Work, groups: Evaluation['groups'], point: ReliefPoint):
   };
 }
 
-/** A pressure difference of a sheet: stated, or as a fraction of set. */
+/** A pressure difference of a sheet in the unit that goes with set: stated, or as a fraction of set. */
 function lossOf(
   sheet: Sheet | undefined,
   set: Q | undefined,
@@ -170,8 +138,19 @@ function lossOf(
 ): Q | undefined {
   const stated = outputOf(sheet, ...names);
   const fraction = outputOf(sheet, ...fractions);
-  if (stated || !set || !fraction) return stated;
+  if (stated) return set ? fromSI(toSI(stated), differenceUnit(set.unit)) : stated;
+  if (!set || !fraction) return undefined;
   return { value: toSI(fraction) * set.value, unit: differenceUnit(set.unit) };
+}
+
+/** The highest back pressure among the worked outlet sheets of a point, Pa absolute. */
+function workedTotal(work: Work, point: ReliefPoint): number | undefined {
+  const own = `outlet:${point.id}/`;
+  const found = Object.values(work.sheets)
+    .filter((sheet) => sheet.key.startsWith(own))
+    .flatMap((sheet) => outputOf(sheet, 'total_back_pressure') ?? [])
+    .filter((q) => dimensionOf(q.unit) === 'pressure-absolute');
+  return found.length === 0 ? undefined : Math.max(...found.map((q) => toSI(q)));
 }
 
 /** Total back pressure, gauge in the unit of set; nothing where only the atmosphere is known. */
@@ -180,7 +159,9 @@ function totalOf(work: Work, point: ReliefPoint, set: Q | undefined): Q | undefi
   const stated = sheet && externalFigure(sheet, 'total_back_pressure', 'P2', 'back_pressure_used');
   const unit = set?.unit ?? (work.basis.units === 'US' ? 'psig' : 'bar_g');
   if (stated) return { value: convert(stated.q, unit, work.context), unit };
+  const worked = workedTotal(work, point);
   const found = pointBackPressure(work, point);
-  if (found.path === 'site/barometer') return undefined;
-  return { value: convert(fromSI(found.pa, 'Pa_abs'), unit, work.context), unit };
+  if (worked === undefined && found.path === 'site/barometer') return undefined;
+  const pa = worked ?? found.pa;
+  return { value: convert(fromSI(pa, 'Pa_abs'), unit, work.context), unit };
 }

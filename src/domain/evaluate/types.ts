@@ -26,11 +26,15 @@ export type Sheet = {
 /** What a sheet, a group or a relief point comes to; never said of a person. */
 export type Verdict = 'adequate' | 'marginal' | 'inadequate' | 'not-sized';
 
-/** What pinned header revisions lend to a basis: the way from its node to the tip and the pressures at that node. */
+/**
+ * What pinned header revisions lend to a basis: the way from its node to the tip, the viscosity of what flows there where the
+ * header states one, and the pressures at that node.
+ */
 export type HeaderImport = {
   revision: number;
   network: Segment[];
   normal: Q;
+  viscosity?: Q;
   causes: Record<Id, { at: Q; flow: Q; T?: Q }>;
 };
 export type ImportSet = { headers: Record<Id, HeaderImport>; loads: Record<Id, Q> };

@@ -1,6 +1,7 @@
 /* The public face of the line arithmetic: bare SI numbers, no sheets. */
 export { adiabaticLine, type AdiabaticSegment } from './adiabatic';
 export { isothermalLine, type IsothermalSegment } from './isothermal';
+export { liquidDrop, liquidLine } from './liquid';
 export { marchedLine, type MarchedSegment, type RisingSegment } from './march';
 export { exitState, inletLine, pipeDischarge, type Exit, type FedLine } from './entrance';
 export { fannoFunction, fannoPressureRatio } from './fanno';

@@ -1,11 +1,26 @@
 /* Method g.noise: sound pressure level of a discharge to the atmosphere. */
 import { type Method } from '../../catalog/types';
 import { noiseAt, noiseAt30, noiseChart } from '../../lines/discharge';
-import { workSheet } from '../../sheet';
-import { input, optional, output } from '../common/describe';
+import { type SheetBuilder, workSheet } from '../../sheet';
+import { GAS_CONSTANT } from '../a-gas/flow';
+import { GAS_INPUTS, input, optional, output } from '../common/describe';
 import { absoluteIn } from '../common/pressures';
 
 const CLAUSE = 'API 521, noise level 30 m from the stack tip';
+
+/** The speed of sound as given, or of the ideal gas with Z. */
+function soundSpeed(sheet: SheetBuilder): number {
+  if (sheet.has('c') || !sheet.has('k')) return sheet.number('c', 'm/s', { above: 0 });
+  const T = sheet.number('T', 'K', { above: 0 });
+  const Z = sheet.number('Z', '-', { above: 0 });
+  const M = sheet.number('M', 'kg/kmol', { above: 0 });
+  const k = sheet.number('k', '-', { min: 1 });
+  sheet.keep('R', GAS_CONSTANT, 'R');
+  return sheet.step(
+    { key: 'c', meaning: 'speed of sound', value: Math.sqrt((k * Z * GAS_CONSTANT * T) / M), unit: 'm/s' },
+    (v) => `\\sqrt{\\frac{${v('k')} \\cdot ${v('Z')} \\cdot ${v('R')} \\cdot ${v('T')}}{${v('M')}}}`,
+  );
+}
 
 /** g.noise: level 30 m from the tip and at a distance. */
 export const NOISE: Method = {
@@ -22,7 +37,8 @@ export const NOISE: Method = {
     input('W', 'mass flow', 'mass-flow'),
     input('P1', 'pressure ahead of the let-down', 'pressure-absolute'),
     input('P2', 'pressure behind it', 'pressure-absolute'),
-    input('c', 'speed of sound at the tip', 'velocity'),
+    optional('c', 'speed of sound of the gas (worked from k, Z, T and M when not given)', 'velocity'),
+    ...GAS_INPUTS.map((one) => ({ ...one, required: false })),
     optional('r', 'distance from the tip (30 m when not given)', 'length'),
     optional('atmospheric_pressure', 'barometric pressure', 'pressure-absolute', { rangeKey: 'barometer' }),
   ],
@@ -36,7 +52,7 @@ export const NOISE: Method = {
       const W = sheet.number('W', 'kg/s', { above: 0 });
       const P1 = absoluteIn(sheet, 'P1', 'p_1', 'kPa_abs');
       const P2 = absoluteIn(sheet, 'P2', 'p_2', 'kPa_abs');
-      const c = sheet.number('c', 'm/s', { above: 0 });
+      const c = soundSpeed(sheet);
       const r = sheet.number('r', 'm', { above: 0, fallback: 30 });
       if (P1 <= P2)
         sheet.refuse(

@@ -1,6 +1,6 @@
 /* Method g.outlet-liquid: back pressure of a line full of liquid that does not flash. */
 import { type Method } from '../../catalog/types';
-import { boreArea, fluxOf } from '../../lines';
+import { boreArea, liquidDrop } from '../../lines';
 import { type SheetBuilder, workSheet } from '../../sheet';
 import { input, optional, output } from '../common/describe';
 import { backPressureSteps, OUTLET_INPUTS, OUTLET_OUTPUTS, segmentOutputs, segmentPressures } from './outlet';
@@ -9,40 +9,38 @@ import { readSegments } from './read';
 import { nameAt, ofSegment, readEach, symbolAt } from './series';
 
 const CLAUSE = 'Darcy–Weisbach with static head';
-const GRAVITY = 9.80665;
-
-type Segment = { G: number; N: number; rise: number; rho: number; beyond: number };
+type Segment = { D: number; W: number; N: number; rise: number };
 
 /** Velocity and inlet pressure of one segment, kPa: what lies beyond, friction, and the weight of the rise. */
 function segmentSteps(
   sheet: SheetBuilder,
   i: number,
   count: number,
-  { G, N, rise, rho, beyond }: Segment,
+  segment: Segment,
+  { rho, beyond }: { rho: number; beyond: number },
 ): number {
-  const velocity = sheet.step(
+  sheet.step(
     {
       key: `v ${i}`,
       tex: symbolAt('v', i, count),
       meaning: `velocity${ofSegment(i, count)}`,
-      value: G / rho,
+      value: segment.W / rho / boreArea(segment.D),
       unit: 'm/s',
     },
     (v) => `\\frac{4 \\, ${v(nameAt('W', i))}}{\\pi \\, ${v(nameAt('D', i))}^2 \\cdot ${v('rho')}}`,
   );
   const after = i === count - 1 ? 'P_exit_ambient' : `pin ${i + 1}`;
-  const weight = rise === 0 ? 0 : rho * GRAVITY * rise;
   return sheet.step(
     {
       key: `pin ${i}`,
       tex: symbolAt('p_{in}', i, count),
       meaning: `static pressure at the beginning${ofSegment(i, count)}`,
-      value: beyond + (N * rho * velocity ** 2) / 2e3 + weight / 1e3,
+      value: beyond + liquidDrop(segment, rho) / 1e3,
       unit: 'kPa_abs',
       clause: CLAUSE,
     },
     (v) =>
-      `${v(after)} + 10^{-3} \\left(${v(`N ${i}`)} \\, \\frac{${v('rho')} \\cdot ${v(`v ${i}`)}^2}{2}${rise === 0 ? '' : ` + ${v('rho')} \\cdot 9.80665 \\cdot ${v(nameAt('rise', i))}`}\\right)`,
+      `${v(after)} + 10^{-3} \\left(${v(`N ${i}`)} \\, \\frac{${v('rho')} \\cdot ${v(`v ${i}`)}^2}{2}${segment.rise === 0 ? '' : ` + ${v('rho')} \\cdot 9.80665 \\cdot ${v(nameAt('rise', i))}`}\\right)`,
   );
 }
 
@@ -78,8 +76,8 @@ export const OUTLET_LIQUID: Method = {
       const rise = readEach(sheet, 'rise', count, { unit: 'm', bounds: { fallback: 0 }, tex: 'h' });
       let beyond = end;
       for (let i = count - 1; i >= 0; i -= 1) {
-        const G = fluxOf({ D: D[i] ?? 1, W: W[i] ?? 0, N: 0 });
-        const inlet = segmentSteps(sheet, i, count, { G, N: N[i] ?? 0, rise: rise[i] ?? 0, rho, beyond });
+        const segment = { D: D[i] ?? 1, W: W[i] ?? 0, N: N[i] ?? 0, rise: rise[i] ?? 0 };
+        const inlet = segmentSteps(sheet, i, count, segment, { rho, beyond });
         if (inlet <= 0)
           sheet.refuse(
             'NO_RESULT',
