@@ -26,12 +26,12 @@ export function differenceUnit(gauge: string): string {
 
 /** Makes the sheets of every relief point and its results. */
 export function pointResults(work: Work, groups: Evaluation['groups']): Evaluation['points'] {
+  makeVents(work);
   const governed = work.basis.reliefPoints.map((point) => ({ point, ca: governingOf(work, groups, point) }));
   for (const { point } of governed) {
     for (const about of ABOUTS) makeExternal(work, about, point);
     makeCold(work, point);
   }
-  makeVents(work);
   makeLines(work, governed);
   return Object.fromEntries(
     work.basis.reliefPoints.map((point) => [point.id, resultOf(work, groups, point)]),

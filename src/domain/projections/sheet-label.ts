@@ -33,5 +33,6 @@ export function sheetLabel(doc: Basis, key: string): string {
   }
   const about =
     doc.reliefPoints.find((one) => one.id === id)?.tag ?? doc.groups.find((one) => one.id === id)?.name;
-  return about === undefined ? words : `${words}, ${about}`;
+  const side = answerId === 'vacuum' ? ' under vacuum' : '';
+  return about === undefined ? `${words}${side}` : `${words}${side}, ${about}`;
 }

@@ -13,6 +13,7 @@ import stored from '../../reference/ketterwold-computed.json';
 
 type Row = { group: string; relief_load: Q; required_area: Q; detail: Record<string, Q> };
 const STORED = stored.systems as unknown as Record<string, { causes: Record<string, Row[]> }>;
+const DEVICES = stored.systems as unknown as Record<string, { devices: Record<string, Record<string, Q>> }>;
 const { judgement } = siteRules('2026-01-05');
 
 const rows = ['SYS-501', 'SYS-502'].flatMap((tag) =>
@@ -47,6 +48,21 @@ test.each(rows)('%s is worked by the engine and reproduces', (_name, tag, cause,
   const area = ratio(size.outputs['A_required'], row.required_area);
   expect(area).toBeGreaterThan(1.0004);
   expect(area).toBeLessThan(1.0007);
+});
+
+const VENTS = ['SYS-501', 'SYS-502'].flatMap((tag) =>
+  Object.entries(DEVICES[tag]!.devices).flatMap(([device, results]) =>
+    Object.entries(results).map(([name, q]) => [`${device} ${name}`, tag, device, name, q] as const),
+  ),
+);
+
+test.each(VENTS)('%s of the vent is worked and reproduces within 0.1 %', (_name, tag, device, name, q) => {
+  const id = `rp_${device.toLowerCase().replace('-', '')}`;
+  const own = sheets[tag]![`rated:${id}`]!;
+  const sheet =
+    name.endsWith('vacuum') && own.inputs['direction'] !== 'in' ? sheets[tag]![`rated:${id}/vacuum`]! : own;
+  expect(sheet.method).toBe('k.weighted-vent@1');
+  expect(Math.abs(ratio(sheet.outputs['capacity_air'], q) - 1)).toBeLessThan(0.001);
 });
 
 test('the ten answers of both tanks need no external sheet for load or size', () => {

@@ -125,7 +125,7 @@ function capacitySteps(sheet: SheetBuilder, flux: number, { area, system }: Load
     (v) => (flux === 0 ? '0' : `${v('Kd')} \\cdot ${v('flow_area')} \\cdot ${v('G')}`),
   );
   const unit = system === 'US' ? 'SCFH' : 'Nm3/h';
-  sheet.output('capacity', fromSI(mass, W).value, W);
+  sheet.output('W_rated', fromSI(mass, W).value, W);
   sheet.output('capacity_air', fromSI(airVolume(mass), unit).value, unit);
 }
 
@@ -172,7 +172,7 @@ export const WEIGHTED_VENT: Method = {
     output('state', 'shut, opening or full at the pressure asked'),
     output('mass_flux', 'theoretical mass flux of air', 'mass-flux'),
     output('choked', 'whether the vent is choked'),
-    output('capacity', 'air passed, as claimed', 'mass-flow'),
+    output('W_rated', 'air passed, as claimed', 'mass-flow'),
     output('capacity_air', 'the same as a volume', 'normal-volume-flow'),
   ],
   work(inputs, edition) {

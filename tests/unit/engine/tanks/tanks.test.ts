@@ -386,7 +386,7 @@ describe('vents', () => {
       'opening',
       'full',
     ]);
-    expect(at(set + 0.1).outputs['capacity']).toMatchObject({ value: 0 });
+    expect(at(set + 0.1).outputs['W_rated']).toMatchObject({ value: 0 });
     expect(at(set + 0.1).warnings.map((w) => w.code)).toContain('PARTLY_OPEN');
     expect(
       figure('k.weighted-vent', { ...vent, spring_force: q(2, 'N') }, 'set_pressure', 'mbar_g'),
