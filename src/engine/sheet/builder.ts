@@ -102,6 +102,8 @@ export class SheetBuilder {
 
   /** Keeps a symbol for later equations, without a step. */
   keep(key: string, value: number, tex: string = key): number {
+    if (!Number.isFinite(value))
+      this.refuse('NO_RESULT', key, `${key} has no finite value with these inputs; check them.`);
     this.symbols.set(key, { tex, value });
     return value;
   }

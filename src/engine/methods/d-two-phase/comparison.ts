@@ -136,7 +136,7 @@ function warnSpread(sheet: SheetBuilder, fluxes: Fluxes): void {
   }
   for (const way of PREDICTIONS) {
     const off = (fluxes[way] ?? reference) / reference - 1;
-    if (Math.abs(off) > SPREAD)
+    if (Number.isFinite(off) && Math.abs(off) > SPREAD)
       sheet.warn(
         'METHODS_DIFFER',
         `${WORDS[way].meaning}: ${Math.abs(off * 100).toFixed(0)} % ${off > 0 ? 'above' : 'below'} the integration. Say in the basis why one is preferred.`,
