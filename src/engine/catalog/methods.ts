@@ -48,6 +48,7 @@ import { ISO_GAS, ISO_LIQUID, ISO_STEAM } from '../methods/i-iso4126/iso';
 import { LETTERS } from '../methods/i-letters/letter-method';
 import { DEVICE_METHODS } from '../methods/j-devices';
 import { TANK_METHODS } from '../methods/k-tanks';
+import { PROPERTY_METHODS } from '../methods/p-properties';
 import { type Method } from './types';
 
 /** All methods of the engine. */
@@ -108,4 +109,5 @@ export const METHODS: readonly Method[] = [
   ISO_LIQUID,
   ...DEVICE_METHODS,
   ...TANK_METHODS,
+  ...PROPERTY_METHODS,
 ];

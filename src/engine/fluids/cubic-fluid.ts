@@ -13,6 +13,8 @@ export type TwoPhases = {
   x: number[];
   y: number[];
   vapourMoles: number;
+  /** Both phases are as dense as liquids: two liquids, of which a sheet for vapour and liquid must not speak as boiling. */
+  twoLiquids: boolean;
 };
 
 /** The first bubble or the last drop at a pressure: the feed in one phase and what stands beside it in the other. */

@@ -13,6 +13,9 @@ import { newWork } from './flash/work';
 import { between } from './pure-fluid';
 import { pressureInside, temperatureRange } from './range';
 
+/** A phase of less than this many covolumes is a liquid: the critical volume is 3.95, liquids in a fire about 1.2 to 2. */
+const LIQUID_LIKE = 2;
+
 /** Kay's pseudo-critical point: says in what region a mixture is, no more. */
 function pseudoCritical({ n, z, Tc, Pc }: Mixture): { P: number; T: number } {
   return { P: dot(z, Pc, n), T: dot(z, Tc, n) };
@@ -34,7 +37,8 @@ export function mixedFluid(mixture: Mixture, name: string, source: string): Cubi
     const liquid = phaseState(m, t, work.liquid);
     const vapour = phaseState(m, t, work.vapour);
     if (liquid === undefined || vapour === undefined) return undefined;
-    return { liquid, vapour, x: [...work.liquid.x], y: [...work.vapour.x], vapourMoles: beta };
+    const twoLiquids = work.vapour.V < LIQUID_LIKE * work.vapour.b;
+    return { liquid, vapour, x: [...work.liquid.x], y: [...work.vapour.x], vapourMoles: beta, twoLiquids };
   };
 
   const stateOf = (T: number, outcome: Outcome): Equilibrium | undefined => {
@@ -100,7 +104,8 @@ export function mixedFluid(mixture: Mixture, name: string, source: string): Cubi
     const state = end === 'bubble' ? point?.liquid : point?.vapour;
     if (point === undefined || state === undefined) return undefined;
     const { liquid, vapour } = point;
-    const two = { liquid, vapour, x: point.x, y: point.y, vapourMoles: end === 'bubble' ? 0 : 1 };
+    const vapourMoles = end === 'bubble' ? 0 : 1;
+    const two = { liquid, vapour, x: point.x, y: point.y, vapourMoles, twoLiquids: false };
     return {
       state: { P, T: state.T, rho: state.rho, h: state.h, s: state.s, x: end === 'bubble' ? 0 : 1 },
       two,
