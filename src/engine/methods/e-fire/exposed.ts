@@ -5,8 +5,8 @@ import { type SheetBuilder } from '../../sheet';
 import { optional } from '../common/describe';
 import { numbered } from '../common/numbered';
 import { SYSTEM_UNITS, type System } from '../common/system';
-import { effectiveHeight, HEADS, ORIENTATIONS, vesselHeight, wettedArea } from './geometry';
-import { readShape, shapeWords, vesselCount, vesselLabel } from './vessels';
+import { effectiveHeight, HEADS, ORIENTATIONS, vesselHeight } from './geometry';
+import { areaSteps, readShape, vesselCount, vesselLabel } from './vessels';
 
 const CLAUSE = 'exact geometry of shell and heads up to the fire height';
 
@@ -28,29 +28,31 @@ export const EXPOSED_INPUTS: readonly MethodInput[] = [
   optional('fire_height', 'height that the fire reaches (7.6 m or 25 ft when not given)', 'length'),
 ];
 
-/** The surface of one vessel below the fire height, m². */
-function vesselStep(sheet: SheetBuilder, n: number, fireHeight: number, system: System): number {
+/** The surface of one vessel below the fire height, in the system's unit. */
+function vesselSteps(sheet: SheetBuilder, n: number, fireHeight: number, system: System): number {
   const u = SYSTEM_UNITS[system];
   const { vessel, elevation } = readShape(sheet, n, u.L);
   const name = vesselLabel(sheet, n);
-  const height = effectiveHeight(vessel, { level: vesselHeight(vessel), elevation, fireHeight });
-  const area = wettedArea(vessel, height);
-  sheet.keep(`he_${n}`, fromSI(height, u.L).value, `h_{e${n}}`);
+  const full = vesselHeight(vessel);
+  const height = effectiveHeight(vessel, { level: full, elevation, fireHeight });
+  const sphere = vessel.orientation === 'sphere';
+  sheet.keep(`Hv_${n}`, fromSI(full, u.L).value, `H_{v${n}}`);
+  sheet.keep(`R_${n}`, fromSI(vessel.D / 2, u.L).value, `\\tfrac{1}{2}D_{${n}}`);
   sheet.step(
     {
-      key: `A_${n}`,
-      tex: `A'_{${n}}`,
-      meaning: `surface of ${name} that the fire reaches, ${shapeWords(vessel.orientation, vessel.heads)}`,
-      value: fromSI(area, u.area).value,
-      unit: u.area,
+      key: `he_${n}`,
+      tex: `h_{e${n}}`,
+      meaning: `height of ${name} that the fire reaches, not above its inside height`,
+      value: fromSI(height, u.L).value,
+      unit: u.L,
       clause: CLAUSE,
     },
-    (v) =>
-      vessel.orientation === 'sphere'
-        ? `\\pi \\cdot ${v(numbered('D', n))} \\cdot ${v(`he_${n}`)}`
-        : `A_{shell+heads}(${v(numbered('D', n))},\\ ${v(numbered('L', n))},\\ ${v(`he_${n}`)})`,
+    (v) => {
+      const reach = `${v('fire_height')} - ${v(numbered('elevation_of_bottom', n))}`;
+      return `\\max(0,\\ \\min(${v(`Hv_${n}`)},\\ ${sphere ? `\\max(${v(`R_${n}`)},\\ ${reach})` : reach}))`;
+    },
   );
-  return area;
+  return areaSteps(sheet, { n, vessel, name, height, system, surface: 'exposed' });
 }
 
 /** The exposed surface in the system's unit, with its steps; gives `exposed_area`. */
@@ -72,13 +74,13 @@ export function exposedArea(sheet: SheetBuilder, system: System): number {
   const count = vesselCount(sheet);
   const reach = toSI({ value: fireHeight, unit: u.L });
   let sum = 0;
-  for (let n = 1; n <= count; n += 1) sum += vesselStep(sheet, n, reach, system);
+  for (let n = 1; n <= count; n += 1) sum += vesselSteps(sheet, n, reach, system);
   const area = sheet.step(
     {
       key: 'A_exposed',
       tex: "A'",
       meaning: 'surface of all vessels that the fire reaches',
-      value: fromSI(sum, u.area).value,
+      value: sum,
       unit: u.area,
       clause: CLAUSE,
     },

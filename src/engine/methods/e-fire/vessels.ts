@@ -92,22 +92,30 @@ function heightStep(
 
 /** What the heads of a vessel add, in words a checker can rework; the surface of a curved head is found by quadrature. */
 const HEAD_SURFACE: Record<Heads, string> = {
-  ellipsoidal: 'wetted part of two 2:1 ellipsoidal heads, surface of revolution by quadrature',
-  hemispherical: 'wetted part of two hemispherical heads, surface of revolution by quadrature',
-  flat: 'wetted part of the flat ends',
+  ellipsoidal: 'part of two 2:1 ellipsoidal heads, surface of revolution by quadrature',
+  hemispherical: 'part of two hemispherical heads, surface of revolution by quadrature',
+  flat: 'part of the flat ends',
 };
 
-type Part = { n: number; vessel: Vessel; name: string; height: number; system: System };
+/** A vessel whose surface up to a height (m) is shown: wetted by its liquid, or exposed to the fire. */
+export type Part = {
+  n: number;
+  vessel: Vessel;
+  name: string;
+  height: number;
+  system: System;
+  surface: 'wetted' | 'exposed';
+};
 
 /** Its wetted shell. */
-function shellStep(sheet: SheetBuilder, { n, vessel, name, system }: Part, shell: number): void {
+function shellStep(sheet: SheetBuilder, { n, vessel, name, system, surface }: Part, shell: number): void {
   const b = fromSI(headDepth(vessel.heads, vessel.D), SYSTEM_UNITS[system].L).value;
   sheet.keep(`b_${n}`, b, `b_{${n}}`);
   sheet.step(
     {
       key: `As_${n}`,
       tex: `A_{s${n}}`,
-      meaning: `wetted shell of ${name}, ${shapeWords(vessel.orientation, vessel.heads)}`,
+      meaning: `${surface} shell of ${name}, ${shapeWords(vessel.orientation, vessel.heads)}`,
       value: shell,
       unit: SYSTEM_UNITS[system].area,
       clause: 'exact geometry',
@@ -121,16 +129,16 @@ function shellStep(sheet: SheetBuilder, { n, vessel, name, system }: Part, shell
   );
 }
 
-/** Its wetted area: the shell by its equation, the heads by theirs, and their sum. */
-function areaSteps(sheet: SheetBuilder, part: Part): number {
-  const { n, vessel, name, height, system } = part;
+/** Its area up to the height kept under `he_n`: the shell by its equation, the heads by theirs, and their sum under `A_n`. */
+export function areaSteps(sheet: SheetBuilder, part: Part): number {
+  const { n, vessel, name, height, system, surface } = part;
   const unit = SYSTEM_UNITS[system].area;
   const si = wettedParts(vessel, height);
   const area = fromSI(si.shell + si.heads, unit).value;
-  const total = { key: `A_${n}`, tex: `A_{${n}}`, meaning: `wetted area of ${name}`, value: area, unit };
+  const total = { key: `A_${n}`, tex: `A_{${n}}`, meaning: `${surface} area of ${name}`, value: area, unit };
   if (vessel.orientation === 'sphere')
     return sheet.step(
-      { ...total, meaning: `wetted area of ${name}, sphere`, clause: 'exact geometry' },
+      { ...total, meaning: `${surface} area of ${name}, sphere`, clause: 'exact geometry' },
       (v) => `\\pi \\cdot ${v(numbered('D', n))} \\cdot ${v(`he_${n}`)}`,
     );
   shellStep(sheet, part, fromSI(si.shell, unit).value);
@@ -138,7 +146,7 @@ function areaSteps(sheet: SheetBuilder, part: Part): number {
     {
       key: `Ah_${n}`,
       tex: `A_{h${n}}`,
-      meaning: `${HEAD_SURFACE[vessel.heads]} up to the wetted height`,
+      meaning: `${surface} ${HEAD_SURFACE[vessel.heads]}`,
       value: fromSI(si.heads, unit).value,
       unit,
       clause: 'exact geometry',
@@ -164,7 +172,7 @@ function vesselSteps(sheet: SheetBuilder, n: number, fireHeight: number, system:
   const si = effectiveHeight(vessel, { level, elevation, fireHeight });
   const height = fromSI(si, u.L).value;
   heightStep(sheet, n, vessel, name, height, u.L);
-  const area = areaSteps(sheet, { n, vessel, name, height: si, system });
+  const area = areaSteps(sheet, { n, vessel, name, height: si, system, surface: 'wetted' });
   sheet.output(n === 1 ? 'effective_wetted_height' : `effective_wetted_height_${n}`, height, u.L);
   sheet.output(`wetted_area_${n}`, area, u.area);
   if (si === 0 && level > 0)
@@ -172,8 +180,7 @@ function vesselSteps(sheet: SheetBuilder, n: number, fireHeight: number, system:
   return area;
 }
 
-/** A shape in words. */
-export function shapeWords(orientation: Orientation, heads: Heads): string {
+function shapeWords(orientation: Orientation, heads: Heads): string {
   return orientation === 'sphere' ? 'sphere' : `${orientation}, ${heads} heads`;
 }
 
