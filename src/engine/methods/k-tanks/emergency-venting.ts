@@ -128,7 +128,7 @@ function tableStep(sheet: SheetBuilder, area: number, F: number, high: boolean, 
       value: convert({ value: area, unit: SYSTEM_UNITS[system].area }, 'ft2'),
       unit: 'ft2',
     },
-    (v) => v('A'),
+    (v) => (system === 'SI' ? `\\frac{${v('A')}}{0.092\\,903\\,04}` : v('A')),
   );
   const outside = feet > 2800;
   const bare = sheet.step(
