@@ -1,7 +1,7 @@
 /* The frictionless homogeneous-equilibrium nozzle, integrated along the isentrope of any fluid whose properties are known. */
-import { findRoot } from '../numeric';
 import { type FluidState, type PropertySource } from '../properties/types';
 import { firstMaximum } from './maximum';
+import { bubbleBelow, isTwoPhase, onset, sideOf } from './onset';
 
 /** A state on the isentrope with its velocity from rest, m/s, and its mass flux, kg/(m²·s). */
 export type PathState = FluidState & { velocity: number; flux: number };
@@ -18,8 +18,6 @@ const FIRST_STEP = 0.03;
 /** Down to an onset, again with the onset known, and below it. */
 const MAX_STRETCHES = 4;
 
-type Side = 'liquid' | 'vapour';
-
 /** The state at P (Pa) on the isentrope of an inlet at rest, with velocity and flux; undefined outside the formulation. */
 export function pathState(source: PropertySource, inlet: FluidState, P: number): PathState | undefined {
   const state = P === inlet.P ? inlet : source.atPS(P, inlet.s);
@@ -29,66 +27,6 @@ export function pathState(source: PropertySource, inlet: FluidState, P: number):
 function moving(inlet: FluidState, state: FluidState): PathState {
   const velocity = Math.sqrt(2 * Math.max(0, inlet.h - state.h));
   return { ...state, velocity, flux: state.rho * velocity };
-}
-
-const isTwoPhase = (state: FluidState): boolean => state.x !== undefined && state.x > 0 && state.x < 1;
-
-/** The pressure between hi and lo at which the isentrope of entropy s meets the bubble or the dew line. */
-function onsetPressure(
-  source: PropertySource,
-  s: number,
-  side: Side,
-  [hi, lo]: [number, number],
-): number | undefined {
-  const distance = (lnP: number) => (source.saturation(Math.exp(lnP))?.[side].s ?? Number.NaN) - s;
-  const found = findRoot(distance, Math.log(hi), Math.log(lo), { tolerance: 1e-10, maxIterations: 80 });
-  return found.ok ? Math.exp(found.x) : undefined;
-}
-
-/** The onset by halving on whether the state is two-phase, for isentropes that come from above the critical pressure. */
-function onsetByPhase(
-  source: PropertySource,
-  s: number,
-  [hi, lo]: [number, number],
-): { P: number; side: Side } | undefined {
-  let [single, double] = [hi, lo];
-  let last = source.atPS(double, s);
-  for (let i = 0; i < 40 && single / double > 1 + 1e-7; i += 1) {
-    const P = Math.sqrt(single * double);
-    const state = source.atPS(P, s);
-    if (!state) return undefined;
-    if (isTwoPhase(state)) [double, last] = [P, state];
-    else single = P;
-  }
-  return last && { P: double, side: (last.x ?? 0) < 0.5 ? 'liquid' : 'vapour' };
-}
-
-/** From which side the isentrope has entered the two-phase region at P. */
-function sideOf(source: PropertySource, inlet: FluidState, P: number): Side {
-  return (source.atPS(P, inlet.s)?.x ?? 1) < 0.5 ? 'liquid' : 'vapour';
-}
-
-/** Where the phase changes between two pressures of the path, with the state on the side of saturation. */
-function onset(
-  source: PropertySource,
-  inlet: FluidState,
-  between: [number, number],
-  side: Side,
-): PathState | undefined {
-  const direct = onsetPressure(source, inlet.s, side, between);
-  const found = direct === undefined ? onsetByPhase(source, inlet.s, between) : { P: direct, side };
-  const state = found && source.saturation(found.P)?.[found.side];
-  if (!state || !found) return undefined;
-  const { P, T, rho, h, s } = state;
-  return moving(inlet, { P, T, rho, h, s, x: found.side === 'liquid' ? 0 : 1 });
-}
-
-/** The bubble point on the way down from a liquid inlet below the critical pressure, when it lies above the back pressure. */
-function bubbleBelow(source: PropertySource, inlet: FluidState, Pb: number): PathState | undefined {
-  const sat = inlet.P < source.critical.P ? source.saturation(inlet.P) : undefined;
-  const low = source.saturation(Pb);
-  if (!sat || !low || inlet.s >= sat.liquid.s || inlet.s <= low.liquid.s) return undefined;
-  return onset(source, inlet, [inlet.P, Pb], 'liquid');
 }
 
 /** What a stretch of one phase region gives: its maximum, or between which pressures the phase changes unforeseen. */
@@ -133,12 +71,13 @@ export function hemThroat(source: PropertySource, inlet: FluidState, Pb: number)
   let start = moving(inlet, inlet);
   if (!(Pb < inlet.P)) return { ...start, choked: false, atOnset: false };
   const way = { source, inlet, Pb };
-  let ahead = inlet.x === undefined ? bubbleBelow(source, inlet, Pb) : undefined;
+  const along = (state: FluidState | undefined) => state && moving(inlet, state);
+  let ahead = inlet.x === undefined ? along(bubbleBelow(source, inlet, Pb)) : undefined;
   for (let i = 0; i < MAX_STRETCHES; i += 1) {
     const found = stretch(way, start, ahead);
     if (!found) return undefined;
     if ('change' in found) {
-      ahead = onset(source, inlet, found.change, sideOf(source, inlet, found.change[1]));
+      ahead = along(onset(source, inlet, found.change, sideOf(source, inlet, found.change[1])));
       if (!ahead) return undefined;
     } else if (found.peak.choked || !ahead) {
       return found.peak;

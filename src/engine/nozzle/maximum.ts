@@ -22,27 +22,43 @@ function golden(a: Point, b: Point, c: Point): number {
   return c.y - b.y > b.y - a.y ? b.y + 0.381966 * (c.y - b.y) : b.y - 0.381966 * (b.y - a.y);
 }
 
-/** The next place to look, inside the bracket and apart from the points that are known. */
-function nextPlace(bracket: readonly [Point, Point, Point], tolerance: number, force: boolean): number {
+/**
+ * Width of the bracket below which a parabola through it is believed, absolute and as a share of the way from the start, near
+ * which a flux grows like a root; and the gain, over f, that is worth a look.
+ */
+const BELIEVED = 0.1;
+const BELIEVED_SHARE = 0.15;
+const WORTH = 1e-8;
+
+/** What the parabola promises above the middle point, at its vertex. */
+function promised([a, b, c]: Bracket, y: number): number {
+  const left = (b.f - a.f) / (b.y - a.y);
+  const bend = ((c.f - b.f) / (c.y - b.y) - left) / (c.y - a.y);
+  return (left + bend * (y - a.y)) * (y - b.y);
+}
+
+type Bracket = readonly [Point, Point, Point];
+
+/** The next place to look, inside the bracket and apart from the points that are known; undefined when b is good enough. */
+function nextPlace(bracket: Bracket, tolerance: number, force: boolean): number | undefined {
   const [a, b, c] = bracket;
   const guess = force ? undefined : vertex(a, b, c);
   if (guess === undefined || !(guess > a.y && guess < c.y)) return golden(a, b, c);
+  const narrow = c.y - a.y < Math.min(BELIEVED, BELIEVED_SHARE * b.y);
+  if (narrow && promised(bracket, guess) < WORTH * b.f) return undefined;
   const apart = Math.abs(guess - b.y) >= tolerance / 2;
   return apart ? guess : b.y + (c.y - b.y > b.y - a.y ? tolerance / 2 : -tolerance / 2);
 }
 
 /** The maximum between a and c, b being higher than both; undefined where the function has no value. */
-function refine(
-  f: (y: number) => number | undefined,
-  start: [Point, Point, Point],
-  tolerance: number,
-): Point | undefined {
+function refine(f: (y: number) => number | undefined, start: Bracket, tolerance: number): Point | undefined {
   let [a, b, c] = start;
   let width = c.y - a.y;
   for (let i = 0; i < MAX_REFINEMENTS && c.y - a.y > tolerance; i += 1) {
     const force = i % 4 === 3 && c.y - a.y > width / 2;
     if (i % 4 === 3) width = c.y - a.y;
     const y = nextPlace([a, b, c], tolerance, force);
+    if (y === undefined) return b;
     const value = f(y);
     if (value === undefined) return undefined;
     const at = { y, f: value };
