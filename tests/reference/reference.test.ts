@@ -15,6 +15,7 @@ import hLimits from './h-limits.json';
 import iAreas from './i-areas.json';
 import jDevices from './j-devices.json';
 import kTanks from './k-tanks.json';
+import pProperties from './p-properties.json';
 
 const FILES = {
   aGas,
@@ -29,6 +30,7 @@ const FILES = {
   iAreas,
   jDevices,
   kTanks,
+  pProperties,
 };
 
 describe.each(Object.entries(FILES))('%s', (_file, { cases }) => {

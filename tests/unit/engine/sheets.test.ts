@@ -17,6 +17,7 @@ import hLimits from '../../reference/h-limits.json';
 import iAreas from '../../reference/i-areas.json';
 import jDevices from '../../reference/j-devices.json';
 import kTanks from '../../reference/k-tanks.json';
+import pProperties from '../../reference/p-properties.json';
 
 const CASES = [
   aGas,
@@ -30,6 +31,7 @@ const CASES = [
   iAreas,
   jDevices,
   kTanks,
+  pProperties,
 ].flatMap(
   (f) =>
     f.cases as unknown as {

@@ -7,7 +7,7 @@ import { relievingAbsolute } from '../common/pressures';
 import { LATENT_FLOOR } from '../f-loads/latent';
 import { boilingCurve, type Stretch } from './boiling';
 import { FLUID_INPUTS, readWorked } from './fluid';
-import { noBubble } from './latent-heat';
+import { noBubble, warnLatentHigh } from './latent-heat';
 
 /** Stretches of the curve when none are asked for, and the most that are worked. */
 const STEPS = 20;
@@ -169,6 +169,7 @@ export const BOILING_CURVE: Method = {
           'fluid',
           'Water boils at one temperature: there is no curve. Take its latent heat (p.latent-heat).',
         );
+      warnLatentHigh(sheet, worked);
       const { substances, z } = cubic.mixture;
       const { stretches, ended } = boilingCurve(substances, [...z], P, steps, last);
       if (stretches.length === 0) noBubble(sheet, worked, P);

@@ -11,6 +11,29 @@ import { type Figure, FLUID_INPUTS, ownGovern, readWorked, settle, type Worked }
 const LATENT: Figure = { name: 'latent_heat', meaning: 'latent heat', tex: '\\lambda', unit: 'kJ/kg' };
 const BUBBLE: Figure = { name: 'bubble_temperature', meaning: 'boiling temperature', tex: 'T_b', unit: 'K' };
 
+/** Substances whose latent heat the equation gives 3 to 7 % too great, as found against reference equations of state. */
+const LATENT_HIGH = [
+  'methanol',
+  'acetone',
+  'ammonia',
+  'propyne',
+  'hydrogen chloride',
+  'methyl chloride',
+  'R-32',
+  'water',
+];
+
+/** Warns of substances whose latent heat comes out too great, and with it the load too small. */
+export function warnLatentHigh(sheet: SheetBuilder, { cubic }: Worked): void {
+  const named =
+    cubic?.mixture.substances.filter((s) => LATENT_HIGH.includes(s.name)).map((s) => s.name) ?? [];
+  if (named.length > 0)
+    sheet.warn(
+      'LATENT_HEAT_HIGH',
+      `Of ${named.join(', ')} the equation gives a latent heat 3 to 7 % too great, so that a load from it is as much too small: take a measured one where it matters.`,
+    );
+}
+
 /** Refuses a pressure at which the liquid has no bubble point. */
 export function noBubble(sheet: SheetBuilder, { source, cubic }: Worked, P: number): never {
   const kPa = (p: number) => `${(p / 1000).toPrecision(4)} kPa`;
@@ -174,6 +197,7 @@ export const LATENT_HEAT: Method = {
           tex: '\\text{own figures}',
         });
       const found = worked && workedLines(sheet, worked, P);
+      if (worked) warnLatentHigh(sheet, worked);
       settle(sheet, BUBBLE, found?.T, own);
       const latent = settle(sheet, LATENT, found?.latent, own);
       if (latent !== undefined && latent * 1000 < LATENT_FLOOR)
