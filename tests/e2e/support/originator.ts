@@ -69,7 +69,8 @@ export async function propose(page: Page, element: string, figures: readonly Pro
   const part = page
     .locator('details.element')
     .filter({ has: page.locator(`summary b:text-is("${element}")`) });
-  const section = page.locator('section').filter({ has: part });
+  const row = page.locator('.figure-row').getByText(figures[0]?.label ?? '', { exact: true });
+  const section = page.locator('section').filter({ has: part.filter({ has: row }) });
   const change = section.getByRole('link', { name: 'Change these' }).first();
   if ((await change.count()) > 0) await change.click();
   const found = part.filter({ has: page.getByLabel(figures[0]?.label ?? '', { exact: true }) }).first();
