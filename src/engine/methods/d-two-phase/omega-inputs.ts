@@ -151,6 +151,7 @@ function withoutFlashing(sheet: SheetBuilder, system: System): number {
 export function readOmega(sheet: SheetBuilder, system: System, P0: number): OmegaRead {
   const form = formOf(sheet);
   const v0 = volumeStep(sheet, system);
+  sheet.output('v0', v0, FLUX_UNITS[system].v);
   const ways: Record<Form, () => number> = {
     given: () => givenOmega(sheet, v0, system),
     'two volumes': () => fromTwoVolumes(sheet, v0, system),

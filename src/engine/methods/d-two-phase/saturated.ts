@@ -64,6 +64,7 @@ export const OMEGA_SATURATED: Method = {
   ],
   outputs: [
     output('P1', 'relieving pressure', 'pressure-absolute'),
+    output('v0', 'specific volume of the mixture at the inlet', 'specific-volume'),
     output('omega', 'omega parameter', 'dimensionless'),
     output('critical_pressure_ratio', 'critical pressure over inlet pressure', 'dimensionless'),
     output('critical_pressure', 'critical pressure', 'pressure-absolute'),
