@@ -1,6 +1,6 @@
 /* Method j.disk-tolerance: burst tolerance, manufacturing range and margin to the operating pressure of a rupture disk. */
 import { type Method } from '../../catalog/types';
-import { type SheetBuilder, workSheet } from '../../sheet';
+import { type SheetBuilder, type Show, workSheet } from '../../sheet';
 import { optional, output } from '../common/describe';
 import { SYSTEM_UNITS, type System, systemOf } from '../common/system';
 import { burstTolerance } from '../h-limits';
@@ -8,22 +8,23 @@ import { type BurstRange, burstSpan, highestSpecified } from './burst';
 
 const CLAUSE = 'ASME VIII-1 UG-127(a)(1); API 520-1, manufacturing range and burst tolerance';
 
-/** Manufacturing range, and the tolerance of a marked pressure: a stated share of it, else that of ASME. */
-type Terms = BurstRange & { tolerance: (marked: number) => number; tex: (marked: string) => string };
+/** Manufacturing range, and the tolerance of a marked pressure with its equation: a stated share, else that of ASME. */
+type Terms = BurstRange & { tolerance: (marked: number) => number; tex: (v: Show, marked: string) => string };
 
 function readTerms(sheet: SheetBuilder, system: System): Terms {
   const rangeUp = sheet.number('range_up', '-', { min: 0, max: 0.5, fallback: 0 }, 'r_+');
   const rangeDown = sheet.number('range_down', '-', { min: 0, max: 0.5, fallback: 0 }, 'r_-');
   if (sheet.has('tolerance')) {
     const share = sheet.number('tolerance', '-', { min: 0, max: 0.5 }, 't');
-    return { rangeUp, rangeDown, tolerance: (marked) => share * marked, tex: (m) => `t \\cdot ${m}` };
+    const tex = (v: Show, marked: string) => `${v('tolerance')} \\cdot ${v(marked)}`;
+    return { rangeUp, rangeDown, tolerance: (marked) => share * marked, tex };
   }
-  const rule = system === 'US' ? '2\\ \\text{or}\\ 0.05' : '15\\ \\text{or}\\ 0.05';
+  const least = system === 'US' ? 2 : 15;
   return {
     rangeUp,
     rangeDown,
     tolerance: (marked) => burstTolerance(marked, system),
-    tex: (m) => `(${rule} \\cdot ${m})`,
+    tex: (v, marked) => `\\max(${least},\\ 0.05 \\cdot ${v(marked)})`,
   };
 }
 
@@ -95,13 +96,13 @@ function spanSteps(
       'burstMax',
       'p_{b,max}',
       'highest pressure of bursting',
-      (v) => `${v('markedMax')} + ${terms.tex(v('markedMax'))}`,
+      (v) => `${v('markedMax')} + ${terms.tex(v, 'markedMax')}`,
     ],
     [
       'burstMin',
       'p_{b,min}',
       'lowest pressure of bursting',
-      (v) => `${v('markedMin')} - ${terms.tex(v('markedMin'))}`,
+      (v) => `${v('markedMin')} - ${terms.tex(v, 'markedMin')}`,
     ],
   ];
   const names = {
