@@ -1,5 +1,6 @@
 /* External sheets: calculations of the site's relief study that this engine does not work, with their stored figures. */
 import { type ExternalSheet, type F, type Input } from '@domain/basis';
+import { isVent } from './axes';
 import { type DemoAnswerResult, type DemoDevice, type DemoQ } from './demo-types';
 import { compact, plainQ } from './figures';
 import { idOf } from './ids';
@@ -92,8 +93,6 @@ function pick(results: Results, names: Record<string, string>): Record<string, F
 const FIGURES: Record<About, Record<string, string>> = {
   rated: {
     rated_capacity: 'rated_capacity',
-    rated_capacity_pressure: 'rated_capacity_pressure',
-    rated_capacity_vacuum: 'rated_capacity_vacuum',
   },
   inlet: {
     inlet_loss: 'inlet_loss',
@@ -129,11 +128,12 @@ function inputsFor(about: About, point: string): Record<string, Input> {
 /** The stored results of a device, the back pressure that sized it, and the study they come from. */
 export type DeviceResults = { results: Results; backPressure: DemoQ | undefined; study: string };
 
-/** The external sheets about one device: rated capacity, inlet loss, back pressure used and total, force. */
+/** The external sheets about one device: rated capacity (that of vents is worked), inlet loss, back pressure, force. */
 export function deviceSheets(device: DemoDevice, found: DeviceResults): ExternalSheet[] {
   const { results, backPressure, study } = found;
   const point = pointId(device.tag);
   return (Object.keys(FIGURES) as About[]).flatMap((about) => {
+    if (about === 'rated' && isVent(device)) return [];
     const picked = pick(results, FIGURES[about]);
     const used: Record<string, F> =
       about === 'outlet' && backPressure ? { P2: plainQ(backPressure), ...totalOf(device, results) } : {};
