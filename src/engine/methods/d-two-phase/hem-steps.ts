@@ -36,7 +36,7 @@ const mark = (n: number): string => `_{${n === 0 ? 't' : n === 1 ? 'a' : 'b'}}`;
 function fluxLine(sheet: SheetBuilder, state: PathState, place: number, meaning: string): number {
   const i = mark(place);
   sheet.keep(`P${i}`, state.P / 1000, `P${i}`);
-  sheet.keep(`h${i}`, state.h / 1000, `h${i}`);
+  sheet.keep(`dh${i}`, state.velocity ** 2 / 2, `\\Delta h${i}`);
   sheet.keep(`rho${i}`, state.rho, `\\rho${i}`);
   return sheet.step(
     {
@@ -47,7 +47,7 @@ function fluxLine(sheet: SheetBuilder, state: PathState, place: number, meaning:
       unit: 'kg/(m2.s)',
       clause: HEM_CLAUSE,
     },
-    (v) => `${v(`rho${i}`)} \\sqrt{2 \\cdot 1000 \\, (${v('h0')} - ${v(`h${i}`)})}`,
+    (v) => `${v(`rho${i}`)} \\sqrt{2 \\cdot ${v(`dh${i}`)}}`,
   );
 }
 
@@ -75,6 +75,18 @@ function throatState(sheet: SheetBuilder, throat: Throat): void {
     (v) => (throat.choked ? '\\arg\\max_P\\ \\rho(P, s_0) \\sqrt{2(h_0 - h(P, s_0))}' : v('back')),
   );
   info('h_t', 'h_t', 'enthalpy at the throat', throat.h / 1000, 'kJ/kg');
+  // The difference stands as a line of its own: two printed enthalpies do not carry the figures that a hand check needs.
+  sheet.step(
+    {
+      key: 'dh_t',
+      tex: '\\Delta h_t',
+      meaning: 'drop of enthalpy from the inlet to the throat',
+      value: throat.velocity ** 2 / 2,
+      unit: 'J/kg',
+      clause: HEM_CLAUSE,
+    },
+    () => '1000\\,(h_0 - h_t)',
+  );
   info('rho_t', '\\rho_t', 'density at the throat', throat.rho, 'kg/m3');
   if (throat.x !== undefined) info('x_t', 'x_t', 'vapour mass fraction at the throat', throat.x, '-');
 }

@@ -282,6 +282,21 @@ describe('the comparison of methods', () => {
   });
 });
 
+describe('a sheet of direct integration', () => {
+  it('can be worked again from its printed figures: flux from density and drop of enthalpy, and no more at ± 2 %', () => {
+    const { x0: _, ...rest } = HEM;
+    for (const inputs of [HEM, { ...rest, P0: q(2, 'MPa_abs'), T0: q(453.15, 'K') }]) {
+      const { steps } = workMethod('d.hem-size', inputs);
+      const figure = (symbol: string) =>
+        Number(Number(steps.find((s) => s.symbol === symbol)?.value).toPrecision(6));
+      const again = figure('\\rho_t') * Math.sqrt(2 * figure('\\Delta h_t'));
+      expect(Math.abs(again / figure('G') - 1)).toBeLessThan(1e-5);
+      expect(figure('G_{a}')).toBeLessThanOrEqual(figure('G'));
+      expect(figure('G_{b}')).toBeLessThanOrEqual(figure('G'));
+    }
+  });
+});
+
 describe('every sheet', () => {
   const SHEETS: [string, Inputs][] = [
     ['d.omega-saturated', WATER_10_BAR],
