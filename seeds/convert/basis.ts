@@ -1,9 +1,8 @@
 /* A system of the invented site as a relief basis. */
-import { type Basis, type ExternalSheet, type Import } from '@domain/basis';
+import { type Basis, type Import } from '@domain/basis';
 import { externalInputsHash } from '@domain/evaluate';
-import { type DemoAnswerResult, type DemoResults, type DemoSystem } from './demo-types';
+import { type DemoResults, type DemoSystem } from './demo-types';
 import { equipmentOf, placeOf } from './equipment';
-import { deviceSheets, SITE_STUDY } from './external';
 import { rich } from './figures';
 import { fluidOf } from './fluids';
 import { groupOf, interlocksOf, isolationsOf } from './groups';
@@ -13,28 +12,6 @@ import { conditionsOf, justificationsOf, neighboursOf, onceOf, referencesOf } fr
 import { pointId, pointOf } from './points';
 import { scenariosOf } from './scenarios';
 import { sourcesOf } from './sources';
-
-/** The stored back pressure that sized a device: that of the first answer of a group in which it is credited. */
-function backPressure(
-  system: DemoSystem,
-  results: DemoResults,
-  tag: string,
-): DemoAnswerResult['back_pressure_used'] | undefined {
-  const groups = system.groups.filter((group) => group.devices.includes(tag)).map((group) => group.id);
-  return Object.values(results.causes)
-    .flat()
-    .find((answer) => groups.includes(answer.group))?.back_pressure_used;
-}
-
-function deviceSheetsOf(system: DemoSystem, results: DemoResults): ExternalSheet[] {
-  return system.devices.flatMap((device) =>
-    deviceSheets(device, {
-      results: results.devices[device.tag] ?? {},
-      backPressure: backPressure(system, results, device.tag),
-      study: results.study ?? SITE_STUDY,
-    }),
-  );
-}
 
 /** One path a relief point, from the limiting item of its group; the valves on the drawing are those of the register. */
 function pathsOf(system: DemoSystem): Basis['boundary']['paths'] {
@@ -85,7 +62,7 @@ function assembled(system: DemoSystem, results: DemoResults): Basis {
     segments,
     lines,
     scenarios,
-    externalSheets: [...sheets, ...deviceSheetsOf(system, results)],
+    externalSheets: sheets,
     fieldConditions: conditionsOf(system),
     references: referencesOf(system),
     once: onceOf(system),

@@ -25,7 +25,13 @@ function lentBy(tag: string, nodeId: string): HeaderImport | undefined {
     return at ? [[causeId(cause), { at: plainQ(at), flow: plainQ(stored.total_flow) }] as const] : [];
   });
   const network = wayToTip(header, nodeId).map(({ from: _from, to: _to, ...segment }) => segment);
-  return { revision: 1, network, normal: plainQ(demo.normal_pressure), causes: Object.fromEntries(causes) };
+  return {
+    revision: 1,
+    network,
+    normal: plainQ(demo.normal_pressure),
+    viscosity: plainQ(demo.gas_viscosity),
+    causes: Object.fromEntries(causes),
+  };
 }
 
 /** The import set of a basis: one entry a header that it pins. */

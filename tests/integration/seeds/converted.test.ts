@@ -36,6 +36,26 @@ const VISCOUS = new Set([
   'SYS-305 size:thermal-expansion/ans_g1',
 ]);
 
+/**
+ * The stored results size every scenario of a group against one back pressure, that of the governing scenario (or the barometer);
+ * here each stands against the outlet that its own flow makes. What that moves by more than 0.5 %, one by one:
+ * - SYS-101, SYS-301, SYS-403 overfill and SYS-402 thermal expansion: the liquid fills the line much slower than the vapour that
+ *   governs, so its outlet stands at 1.18, 1.57, 0.95 and 0.93 bara instead of 1.24, 2.70, 1.09 and 1.00: less area.
+ * - SYS-104, restart and blocked outlet: stored against the barometer of 0.918 bara, although the line ends in V-115 under
+ *   0.12 bara; the outlet stands at 0.18 to 0.60 bara: less area.
+ * - SYS-304 tube rupture: stored against the barometer; the tail pipe behind RD-305 adds 2.5 psi at the flow of the disk: more area.
+ */
+const OWN_OUTLET = new Set([
+  'SYS-101 size:overfill/ans_g1',
+  'SYS-104 size:closed-outlet/ans_g1',
+  'SYS-104 size:outlet-control-valve-closed/ans_g1',
+  'SYS-104 size:isolated-equipment-heating/ans_g1',
+  'SYS-301 size:overfill/ans_g1',
+  'SYS-304 size:tube-rupture/ans_g1',
+  'SYS-402 size:thermal-expansion/ans_g1',
+  'SYS-403 size:overfill/ans_g1',
+]);
+
 type Compared = { name: string; method: string; ratio: number; off: number };
 
 function comparedIn(tag: string): Compared[] {
@@ -90,7 +110,9 @@ test('no sheet of the site is refused', () => {
 test('what the engine works gives the stored results within 0.5 %', () => {
   // Limits, loads and sizes of all 101 answers, but for sizes that still stand on external sheets.
   expect(worked.length).toBeGreaterThanOrEqual(302);
-  const off = worked.filter((one) => !(one.off <= 0.005) && !VISCOUS.has(one.name));
+  const off = worked.filter(
+    (one) => !(one.off <= 0.005) && !VISCOUS.has(one.name) && !OWN_OUTLET.has(one.name),
+  );
   expect(off.map((one) => `${one.name} by ${one.method}: ${(one.off * 100).toFixed(2)} %`)).toEqual([]);
 });
 
@@ -103,6 +125,14 @@ test('every load of the site is worked by the engine: none is stated, none stand
 
 test('the sheets that take a viscosity correction ask for more area than stored, never for less', () => {
   for (const name of VISCOUS) expect(worked.find((one) => one.name === name)!.ratio).toBeGreaterThan(1.005);
+});
+
+test('sizes that stand against their own outlet move by less than 3 %', () => {
+  for (const name of OWN_OUTLET)
+    expect([name, worked.find((one) => one.name === name)!.off]).toEqual([
+      name,
+      expect.toSatisfy((off: number) => off < 0.03),
+    ]);
 });
 
 test('external sheets carry the stored figures unchanged', () => {
@@ -146,7 +176,8 @@ test('every group has the governing scenario and the verdict that are stored', (
       const result = evaluations.get(tag)!.groups[groupId(group)]!;
       expect([tag, group, result.verdict]).toEqual([tag, group, own.status]);
       expect(result.governing).toBe(`size:${scenarioKey(own.governing_cause)}/${answerId(group)}`);
-      if (!VISCOUS.has(`${tag} ${result.governing!}`))
+      const governing = `${tag} ${result.governing!}`;
+      if (!VISCOUS.has(governing) && !OWN_OUTLET.has(governing))
         expect(Math.abs(result.use! * (1 + own.margin) - 1)).toBeLessThan(0.005);
     }
   }

@@ -105,7 +105,6 @@ export const ACOUSTIC_FATIGUE: Method = {
         sheet.warn(
           'ACOUSTIC_FATIGUE',
           `The sound power level is ${total.toFixed(1)} dB, at or above ${limit} dB: welds, branches and wall thickness need an analysis.`,
-          `below ${limit} dB`,
         );
     });
   },

@@ -11,7 +11,6 @@ import { FLOW_INPUTS, readSegments, SEGMENT_INPUTS } from './read';
 import { nameAt, ofSegment, symbolAt } from './series';
 
 const CLAUSE = 'Darcy–Weisbach; API 520-2, non-recoverable inlet loss';
-const RULE = '3 % of set: ASME VIII-1 Appendix M, API 520-2';
 
 /** Velocity and loss of one segment; kPa. */
 function segmentLoss(
@@ -104,7 +103,6 @@ function judge(sheet: SheetBuilder, key: string, loss: number): void {
     sheet.warn(
       'INLET_LOSS_HIGH',
       `The loss is ${(share * 100).toPrecision(3)} % of set, above ${(limit * 100).toPrecision(3)} %: the valve may chatter. More is accepted only with an engineering analysis.`,
-      RULE,
     );
 }
 

@@ -86,6 +86,5 @@ export function backPressureSteps(sheet: SheetBuilder, { inlet, end, mach, choke
     sheet.warn(
       'MACH_HIGH',
       `The highest Mach number is ${mach.toFixed(2)}; above 0.7 small errors of flow or bore move the back pressure much.`,
-      'Mach up to 0.7',
     );
 }

@@ -43,11 +43,12 @@ const RESULTS: Record<string, readonly string[]> = {
   limit: ['relieving_pressure', 'P1', 'MAAP'],
   load: ['relief_load', 'relief_flow', 'volumetric_load'],
   size: ['A_required'],
-  rated: ['rated', 'rated_capacity', 'W', 'Q'],
+  rated: ['W_rated', 'rated', 'rated_capacity', 'W', 'Q'],
   inlet: ['inlet_loss', 'loss', 'pressure_loss'],
   outlet: ['total_back_pressure', 'built_up_back_pressure'],
   cold: ['CDTP', 'cdtp'],
   force: ['F', 'reaction_force'],
+  noise: ['L30'],
 };
 
 /** The title of a sheet's method. */

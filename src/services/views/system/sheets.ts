@@ -28,8 +28,10 @@ const LEAD: Record<string, readonly string[]> = {
   load: ['relief_load'],
   size: ['A_required'],
   rated: ['W_rated', 'rated', 'W'],
-  inlet: ['inlet_loss', 'dp'],
-  outlet: ['total', 'P2', 'built_up'],
+  inlet: ['inlet_loss', 'loss'],
+  outlet: ['total_back_pressure', 'P2'],
+  force: ['reaction_force'],
+  noise: ['L30'],
   cold: ['CDTP', 'reseat_pressure'],
 };
 
