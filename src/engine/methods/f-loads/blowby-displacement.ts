@@ -22,7 +22,18 @@ function gasLoad(sheet: SheetBuilder): number {
   const type = readType(sheet);
   const C = readCoefficient(sheet, type);
   const r = gasThrough({ ...readPressures(sheet), T, Z, M, k, xT }, C, type);
-  sheet.keep('xs', r.used, 'x');
+  sheet.step(
+    {
+      key: 'xs',
+      tex: 'x',
+      meaning: `ratio of pressure drop to inlet pressure, ${r.choked ? 'held where it chokes' : 'not choked'}`,
+      value: r.used,
+      unit: '-',
+      clause: 'IEC 60534-2-1:2011',
+    },
+    (v) =>
+      `\\min\\left(\\frac{${v('P1')} - ${v('P2')}}{${v('P1')}},\\ \\frac{${v('k')}}{1.4} \\cdot ${v('xT')}\\right)`,
+  );
   sheet.step(
     {
       key: 'Y',

@@ -51,7 +51,8 @@ function gasStep(sheet: SheetBuilder, high: number, low: number, N: number): num
       unit: '-',
       clause: CLAUSE,
     },
-    (v) => `\\text{root of } \\tfrac{4fL^*}{D}(Ma_1) - \\tfrac{4fL^*}{D}(Ma_2) = ${v('N')}`,
+    (v) =>
+      `\\text{root of } F(Ma_1) - F(Ma_2) = ${v('N')},\\ F(Ma) = \\tfrac{1 - Ma^2}{k\\,Ma^2} + \\tfrac{k+1}{2k} \\ln \\tfrac{(k+1)\\,Ma^2}{2 + (k-1)\\,Ma^2},\\ k = ${v('k')}`,
   );
   sheet.output('choked', flow.choked);
   return sheet.step(

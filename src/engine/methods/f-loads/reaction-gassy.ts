@@ -10,8 +10,8 @@ import { gasFlow, gasRate } from './reaction-flow';
 const CLAUSE = 'peak gas rate, gassy systems';
 const VENTINGS = ['two-phase', 'gas'] as const;
 
-/** The peak gas rate per mass from the test, kmol/(s·kg); its background rate is taken off. */
-function testRate(sheet: SheetBuilder): number {
+/** The peak gas rate of the charge from the test, scaled by mass: kmol/h. */
+function testRate(sheet: SheetBuilder, mass: number): number {
   const V = sheet.number('test_free_volume', 'm3', { above: 0 }, 'V_t');
   const peak = sheet.number('pressure_rate', 'kPa/s', { above: 0 }, '\\dot P');
   const T = sheet.number('test_gas_temperature', 'K', { above: 0 }, 'T_t');
@@ -21,17 +21,17 @@ function testRate(sheet: SheetBuilder): number {
     {
       key: 'n',
       tex: '\\dot n',
-      meaning: 'peak gas rate of the test per mass of sample, kmol/(s·kg)',
-      value: gasRate(V, peak * 1000, T, sample),
-      unit: '-',
+      meaning: 'peak gas rate of the charge, from the test by mass',
+      value: gasRate(V, peak * 1000, T, sample) * mass * 3600,
+      unit: 'kmol/h',
       clause: CLAUSE,
     },
     (v) =>
-      `\\frac{1000 \\cdot ${v('test_free_volume')} \\cdot ${v('pressure_rate')}}{${v('R')} \\cdot ${v('test_gas_temperature')} \\cdot ${v('sample_mass')}}`,
+      `3600 \\cdot \\frac{1000 \\cdot ${v('test_free_volume')} \\cdot ${v('pressure_rate')}}{${v('R')} \\cdot ${v('test_gas_temperature')}} \\cdot \\frac{${v('mass')}}{${v('sample_mass')}}`,
   );
 }
 
-/** The mass flow: contents carried out with the gas, or gas alone. kg/s. */
+/** The mass flow: contents carried out with the gas, or gas alone. kg/s; the gas rate in kmol/h. */
 function loadStep(sheet: SheetBuilder, rate: number, mass: number, Q: number): number {
   if (sheet.word('venting', VENTINGS, 'two-phase') === 'gas') {
     sheet.warn(
@@ -40,8 +40,8 @@ function loadStep(sheet: SheetBuilder, rate: number, mass: number, Q: number): n
     );
     const M = sheet.number('M', 'kg/kmol', { above: 0 });
     return sheet.step(
-      { key: 'W', meaning: 'gas load', value: rate * mass * M, unit: 'kg/s', clause: CLAUSE },
-      (v) => `${v('n')} \\cdot ${v('mass')} \\cdot ${v('M')}`,
+      { key: 'W', meaning: 'gas load', value: (rate * M) / 3600, unit: 'kg/s', clause: CLAUSE },
+      (v) => `\\frac{${v('n')} \\cdot ${v('M')}}{3600}`,
     );
   }
   const V = sheet.number('volume', 'm3', { above: 0 }, 'V');
@@ -87,6 +87,7 @@ export const REACTION_GASSY: Method = {
     optional('mass_flux', 'mass flux of the vent, from a nozzle sheet', 'mass-flux'),
   ],
   outputs: [
+    output('gas_rate', 'peak gas rate of the charge', 'molar-flow'),
     output('gas_flow', 'volume flow of the gas at the greatest pressure', 'volume-flow'),
     output('relief_load', 'load', 'mass-flow'),
     output('A_required', 'area of the vent at the mass flux given', 'area'),
@@ -94,7 +95,7 @@ export const REACTION_GASSY: Method = {
   work(inputs, edition) {
     return workSheet(this, inputs, edition, (sheet) => {
       const mass = sheet.number('mass', 'kg', { above: 0 }, 'm_0');
-      const rate = testRate(sheet);
+      const rate = testRate(sheet, mass);
       const P = absolutePressure(sheet, 'P_max', 'P_m', 'SI');
       const T = sheet.number('T', 'K', { above: 0 }, 'T_m');
       const Q = sheet.step(
@@ -102,15 +103,15 @@ export const REACTION_GASSY: Method = {
           key: 'Q',
           tex: 'Q_g',
           meaning: 'volume flow of the gas in the vessel',
-          value: gasFlow(rate, mass, T, P * 1000),
+          value: gasFlow(rate / 3600, 1, T, P * 1000),
           unit: 'm3/s',
           clause: CLAUSE,
         },
-        (v) =>
-          `\\frac{${v('n')} \\cdot ${v('mass')} \\cdot ${v('R')} \\cdot ${v('T')}}{1000 \\cdot ${v('P_max')}}`,
+        (v) => `\\frac{${v('n')} \\cdot ${v('R')} \\cdot ${v('T')}}{3600 \\cdot 1000 \\cdot ${v('P_max')}}`,
       );
       const W = loadStep(sheet, rate, mass, Q);
       const unit = sheet.quantity('mass').unit === 'lb' ? 'lb/h' : 'kg/h';
+      sheet.output('gas_rate', rate, 'kmol/h');
       sheet.output('gas_flow', convert({ value: Q, unit: 'm3/s' }, 'm3/h'), 'm3/h');
       sheet.output('relief_load', fromSI(W, unit).value, unit);
       if (!sheet.has('mass_flux')) return;

@@ -83,9 +83,9 @@ function readSystem(sheet: SheetBuilder): TemperedSystem {
   const q = sheet.step(
     {
       key: 'q',
-      meaning: 'mean heat release per mass, W/kg as J/kg each second',
+      meaning: 'mean heat release per mass',
       value: meanHeatRelease(cp, a, b),
-      unit: 'J/kg',
+      unit: 'W/kg',
       clause: CLAUSE,
     },
     (v) => `\\tfrac{1}{2} \\cdot ${v('cp')} (${v('rs')} + ${v('rm')})`,

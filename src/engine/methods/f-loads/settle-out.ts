@@ -10,9 +10,9 @@ import { absoluteIn } from '../common/pressures';
 /** A part of the loop: kPa absolute, m³, K. */
 export type LoopPart = { P: number; V: number; T: number; Z: number };
 
-/** The amount of gas of a part as P V/(Z T), kPa·m³/K. */
+/** The amount of gas of a part, P V/(Z R T), kmol. */
 export function amount({ P, V, T, Z }: LoopPart): number {
-  return (P * V) / (Z * T);
+  return (1000 * P * V) / (Z * GAS_CONSTANT * T);
 }
 
 /** Mean of a property over the parts, weighted by their amounts (adiabatic mixing at equal molar heat). */
@@ -21,10 +21,10 @@ export function meanBy(parts: readonly LoopPart[], pick: (part: LoopPart) => num
   return parts.reduce((sum, part) => sum + amount(part) * pick(part), 0) / total;
 }
 
-/** Settle-out pressure in kPa absolute at temperature T and compressibility Z: Z T Σ(P V/(Z T))/ΣV. */
+/** Settle-out pressure in kPa absolute at temperature T and compressibility Z: Z R T Σn/ΣV. */
 export function settleOut(parts: readonly LoopPart[], T: number, Z: number): number {
   const total = parts.reduce((sum, part) => sum + amount(part), 0);
-  return (Z * T * total) / parts.reduce((sum, part) => sum + part.V, 0);
+  return (Z * GAS_CONSTANT * T * total) / 1000 / parts.reduce((sum, part) => sum + part.V, 0);
 }
 
 function readPart(sheet: SheetBuilder, n: number): LoopPart {
@@ -36,13 +36,13 @@ function readPart(sheet: SheetBuilder, n: number): LoopPart {
   sheet.step(
     {
       key: `n_${n}`,
-      tex: `n_{${n}} R`,
-      meaning: `amount of gas in part ${n}, kPa·m³/K`,
+      tex: `n_{${n}}`,
+      meaning: `amount of gas in part ${n}`,
       value: amount(part),
-      unit: '-',
+      unit: 'kmol',
     },
     (v) =>
-      `\\frac{${v(numbered('P', n))} \\cdot ${v(numbered('volume', n))}}{${v(numbered('Z', n))} \\cdot ${v(numbered('T', n))}}`,
+      `\\frac{1000 \\cdot ${v(numbered('P', n))} \\cdot ${v(numbered('volume', n))}}{${v(numbered('Z', n))} \\cdot ${v('R')} \\cdot ${v(numbered('T', n))}}`,
   );
   return part;
 }
@@ -119,6 +119,7 @@ export const SETTLE_OUT: Method = {
   ],
   work(inputs, edition) {
     return workSheet(this, inputs, edition, (sheet) => {
+      sheet.keep('R', GAS_CONSTANT);
       const count = Math.max(2, countNumbered(sheet, 'volume'));
       const parts = Array.from({ length: count }, (_, i) => readPart(sheet, i + 1));
       const T = meanStep(sheet, parts, 'T', 'temperature');
@@ -133,13 +134,13 @@ export const SETTLE_OUT: Method = {
           unit: 'kPa_abs',
         },
         (v) =>
-          `\\frac{${v('Z_settled')} \\cdot ${v('T_settled')} \\cdot (${all.map((n) => v(`n_${n}`)).join(' + ')})}{${all.map((n) => v(numbered('volume', n))).join(' + ')}}`,
+          `\\frac{${v('Z_settled')} \\cdot ${v('R')} \\cdot ${v('T_settled')} \\cdot (${all.map((n) => v(`n_${n}`)).join(' + ')})}{1000 \\cdot (${all.map((n) => v(numbered('volume', n))).join(' + ')})}`,
       );
       sheet.output('settle_out_pressure', P, 'kPa_abs');
       sheet.output('settle_out_temperature', T, 'K');
       if (sheet.has('M')) {
         const M = sheet.number('M', 'kg/kmol', { above: 0 });
-        const mass = (1000 * M * parts.reduce((sum, part) => sum + amount(part), 0)) / GAS_CONSTANT;
+        const mass = M * parts.reduce((sum, part) => sum + amount(part), 0);
         const unit = sheet.quantity('M').unit.startsWith('lb') ? 'lb' : 'kg';
         sheet.output('mass', fromSI(mass, unit).value, unit);
       }

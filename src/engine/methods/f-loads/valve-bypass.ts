@@ -44,7 +44,18 @@ function gasPath(sheet: SheetBuilder, path: Path, type: CoefficientType): number
     type,
   );
   const b = path.name === 'coefficient' ? 'v' : 'b';
-  sheet.keep(`x${b}`, r.used, `x_${b}`);
+  sheet.step(
+    {
+      key: `x${b}`,
+      tex: `x_${b}`,
+      meaning: `ratio of pressure drop to inlet pressure, ${r.choked ? 'held where it chokes' : 'not choked'}`,
+      value: r.used,
+      unit: '-',
+      clause: CLAUSE,
+    },
+    (v) =>
+      `\\min\\left(\\frac{${v('P1')} - ${v('P2')}}{${v('P1')}},\\ \\frac{${v('k')}}{1.4} \\cdot ${v(path.trim)}\\right)`,
+  );
   sheet.step(
     {
       key: `Y${b}`,
@@ -84,7 +95,18 @@ function liquidPath(sheet: SheetBuilder, path: Path, type: CoefficientType): num
     );
   const r = liquidThrough({ ...pressures, rho, Pv, Pc, FL: path.factor }, Math.max(path.C, 1e-12), type);
   const b = path.name === 'coefficient' ? 'v' : 'b';
-  sheet.keep(`dp${b}`, r.drop, `\\Delta P_${b}`);
+  sheet.step(
+    {
+      key: `dp${b}`,
+      tex: `\\Delta P_${b}`,
+      meaning: `pressure drop that counts, ${r.choked ? 'held where it chokes' : 'not choked'}`,
+      value: r.drop,
+      unit: 'kPa',
+      clause: CLAUSE,
+    },
+    (v) =>
+      `\\min\\left(${v('P1')} - ${v('P2')},\\ ${v(path.trim)}^2 \\left(${v('P1')} - \\left(0.96 - 0.28 \\sqrt{\\frac{${v('Pv')}}{${v('Pc')}}}\\right) ${v('Pv')}\\right)\\right)`,
+  );
   return sheet.step(
     {
       key: `W${b}`,
