@@ -94,7 +94,7 @@ export const inputSchema = z
   .union([
     ...figureOptions,
     z.strictObject({ use: pathSchema }),
-    z.strictObject({ word: z.string().max(400), origin: originSchema.optional() }),
+    z.strictObject({ word: z.string().max(8000), origin: originSchema.optional() }),
     z.strictObject({ flag: z.boolean(), origin: originSchema.optional() }),
     z.strictObject({ list: z.array(idSchema), origin: originSchema.optional() }),
   ])

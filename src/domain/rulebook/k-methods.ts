@@ -8,6 +8,7 @@ const FAMILIES: [RegExp, Fluid['phase'][]][] = [
   [/(^|:)(b\.steam|i\.iso4126-steam)/, ['gas', 'vapour']],
   [/(^|:)(c\.liquid|i\.iso4126-liquid)/, ['liquid']],
   [/(^|:)d\.omega/, ['two-phase', 'flashing-liquid']],
+  [/(^|:)d\.real-gas-size/, ['gas', 'vapour', 'supercritical']],
 ];
 
 export const phaseMismatch = rule(
