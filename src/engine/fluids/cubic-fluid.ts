@@ -26,6 +26,4 @@ export type CubicFluid = PropertySource & {
   range: { low: number; high: number };
   equilibrium(P: number, T: number): Equilibrium | undefined;
   boundary(P: number, end: End): Boundary | undefined;
-  /** The phases with their compositions at P and a share of vapour by mass; of a pure substance both are the same. */
-  atShare?(P: number, x: number): Equilibrium | undefined;
 };

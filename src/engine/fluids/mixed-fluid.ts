@@ -22,7 +22,8 @@ function pseudoCritical({ n, z, Tc, Pc }: Mixture): { P: number; T: number } {
 }
 
 /**
- * The properties of a mixture. A flash starts from where the last one ended, as a nozzle or a line asks for near states
+ * The properties of a mixture, of vapour and one liquid: where two liquids part (water or glycol with hydrocarbons, cold
+ * carbon dioxide with heavy ones) a second liquid is not looked for. A flash starts from where the last one ended, as a nozzle or a line asks for near states
  * one after the other; every answer is closed to rounding, so that the order of questions does not show in it.
  */
 export function mixedFluid(mixture: Mixture, name: string, source: string): CubicFluid {
@@ -124,7 +125,6 @@ export function mixedFluid(mixture: Mixture, name: string, source: string): Cubi
     range: { low, high },
     equilibrium,
     boundary,
-    atShare,
     atPT: (P, T) => {
       const found = equilibrium(P, T);
       return found?.two === undefined ? (found?.state as PhaseState | undefined) : undefined;

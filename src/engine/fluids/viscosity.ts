@@ -52,7 +52,7 @@ export function phaseViscosity(m: Mixture, { T, V, b, x }: Phase): number | unde
 }
 
 /** Kay's pseudo-critical temperature, K: above it a dense phase is not called a liquid. */
-export function pseudoCritical(m: Mixture, x: ArrayLike<number>): number {
+function pseudoCritical(m: Mixture, x: ArrayLike<number>): number {
   let T = 0;
   for (let i = 0; i < m.n; i += 1) T += at(x, i) * at(m.Tc, i);
   return T;

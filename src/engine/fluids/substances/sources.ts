@@ -8,14 +8,14 @@ export const FLUID_SOURCES = {
   joback:
     'Joback group contributions (Poling, Prausnitz and O’Connell 2001), by the Python package chemicals 1.5.2: an estimate',
   monatomic: 'Monatomic gas: 5/2 R',
-  coolprop: 'Reference equation of state, by the Python package CoolProp 8.0.0',
+  coolprop:
+    'Reference equation of state, by the Python package CoolProp 8.0.0; Z_RA was worked from its liquid density at 0.7 of the critical temperature, heat capacities refitted to a polynomial',
   crc: 'CRC Handbook of Chemistry and Physics, as carried by the Python package chemicals 1.5.2',
   psrk: 'Horstmann et al. (2005), appendix to PSRK revision 4, as carried by the Python package chemicals 1.5.2',
-  yaws: 'Yaws collection of acentric factors, as carried by the Python package chemicals 1.5.2',
   weights: 'From the formula and the standard atomic weights (IUPAC), by the Python package chemicals 1.5.2',
-  zra: 'COSTALD and Rackett parameters (API Technical Data Book set), as carried by the Python package chemicals 1.5.2',
+  zra: 'Z_RA of the set of Hankinson and Thomson (1979), AIChE J. 25, 653, as carried by the Python package chemicals 1.5.2',
   perry:
-    'Perry’s Chemical Engineers’ Handbook, 8th edition, tables 2-32, 2-312 and 2-313, as carried by the Python package chemicals 1.5.2',
+    'Perry’s Chemical Engineers’ Handbook, 8th edition, viscosities (tables 2-312 and 2-313) and liquid densities, as carried by the Python package chemicals 1.5.2; Z_RA was worked from the density at 0.7 of the critical temperature',
 } as const;
 
 /** The key of a source of fluid data. */
