@@ -132,7 +132,17 @@ export const DISK_COEFFICIENT_METHOD: Method = {
       );
       const { A: unit } = SYSTEM_UNITS[system];
       sheet.output('A_required', fromSI(A, unit).value, unit);
-      sheet.output('method_allowed', conditions(sheet));
+      const allowed = conditions(sheet);
+      sheet.output('method_allowed', allowed);
+      sheet.say({
+        symbol: '\\text{method}',
+        meaning: allowed
+          ? 'the conditions of the coefficient are met'
+          : 'the conditions of the coefficient are not all met; see the warnings',
+        value: allowed ? 'allowed' : 'not shown to be allowed',
+        tex: `L_i \\le ${INLET_DIAMETERS} D,\\ L_d \\le ${DISCHARGE_DIAMETERS} D,\\ \\text{to the atmosphere}`,
+        clause: CLAUSE,
+      });
       compare(sheet, A, unit);
     });
   },

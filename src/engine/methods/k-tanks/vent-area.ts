@@ -9,7 +9,7 @@ import { airMass } from './air';
 import { bothPressures, DIRECTIONS, airTemperature, fluxStep, VENT_INPUTS } from './vent-steps';
 import { ventArea } from './vent';
 
-const CLAUSE = 'ISO 28300 / API 2000, flow of air through vents (from memory)';
+const CLAUSE = 'ISO 28300 / API 2000, flow of air through vents';
 
 /** The mass flow of air in kg/s, from its volume or as given. */
 function readLoad(sheet: SheetBuilder): number {
@@ -99,6 +99,7 @@ export const VENT_AREA: Method = {
           value: ventArea(mass, Kd, flux) * factor,
           unit,
           clause: CLAUSE,
+          memory: true,
         },
         (v) => `\\frac{${v('W')}}{${v('Kd')} \\cdot ${v('G')}} \\cdot ${system === 'SI' ? '10^6' : '1550.0'}`,
       );
