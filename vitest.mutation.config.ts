@@ -7,7 +7,7 @@ const from = (path: string) => fileURLToPath(new URL(path, import.meta.url));
 export default defineConfig({
   resolve: { alias: { '@engine': from('./src/engine'), '@domain': from('./src/domain') } },
   test: {
-    include: ['tests/unit/engine/{bare,lines}/*.test.ts'],
+    include: ['tests/unit/engine/bare/*.test.ts'],
     setupFiles: ['tests/support/seeded.ts'],
     testTimeout: 20_000,
   },

@@ -33,7 +33,7 @@ export function headsPaid(curve: VolumeCurve, G: number, p1: number, p2: number)
 
 /** The pressure N velocity heads upstream of `p2`, Pa; undefined when none below 10 000 times the pressures at hand pays them. */
 export function upstreamPressure(curve: VolumeCurve, G: number, N: number, p2: number): number | undefined {
-  if (!(N > 0)) return p2;
+  if (N <= 0) return p2;
   const off = (p: number) => headsPaid(curve, G, p, p2) - N;
   let high = p2 + (N * G * G * volumeAt(curve, p2)) / 2 + G * G * volumeAt(curve, p2);
   for (let round = 0; round < 60 && !(off(high) > 0); round += 1) high *= 2;
@@ -41,21 +41,37 @@ export function upstreamPressure(curve: VolumeCurve, G: number, N: number, p2: n
   return found.ok ? found.x : undefined;
 }
 
-/** Upstream pressure of a segment that also rises: friction and weight in turn over short lengths. */
+/**
+ * The pressure upstream of `p2` where weight pays `gain` velocity heads more than friction takes, so that pressure falls on the way
+ * up; no lower than the limit of the flux, and undefined where the liquid would stand below no pressure at all.
+ */
+function regainedPressure(curve: VolumeCurve, G: number, gain: number, p2: number): number | undefined {
+  const limit = limitPressure(curve, G, 0);
+  const floor = limit > 0 ? limit : p2 * 1e-6;
+  const off = (p: number) => headsPaid(curve, G, p2, p) - gain;
+  if (!(off(floor) > 0)) return limit > 0 ? limit : undefined;
+  const found = findRoot(off, floor, p2, { tolerance: 1e-12 });
+  return found.ok ? found.x : undefined;
+}
+
+/** Upstream pressure of a segment that also rises: over short lengths the weight counts as velocity heads, 2 g h/(G v)². */
 function upstreamRising(
   curve: VolumeCurve,
   G: number,
-  segment: RisingSegment,
+  { rise = 0, N }: RisingSegment,
   p2: number,
 ): number | undefined {
-  const { rise = 0, N } = segment;
   if (rise === 0) return upstreamPressure(curve, G, N, p2);
-  let p: number | undefined = p2;
-  for (let i = 0; i < LIFTS && p !== undefined; i += 1) {
-    p = upstreamPressure(curve, G, N / LIFTS, p);
-    if (p === undefined) return undefined;
-    p = Math.max(limitPressure(curve, G, 0), p + (GRAVITY * rise) / LIFTS / volumeAt(curve, p));
-    if (!(p > 0)) return undefined;
+  const above = (p: number, v: number) => {
+    const heads = (N + (2 * GRAVITY * rise) / (G * v) ** 2) / LIFTS;
+    return heads < 0 ? regainedPressure(curve, G, -heads, p) : upstreamPressure(curve, G, heads, p);
+  };
+  let p = p2;
+  for (let i = 0; i < LIFTS; i += 1) {
+    const near = above(p, volumeAt(curve, p));
+    const found = near === undefined ? undefined : above(p, volumeAt(curve, (p + near) / 2));
+    if (found === undefined) return undefined;
+    p = found;
   }
   return p;
 }

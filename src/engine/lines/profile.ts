@@ -4,7 +4,7 @@ import { adiabaticLine } from './adiabatic';
 import { fannoUpstream, temperatureRatio } from './fanno';
 import { isothermalLine, isothermalRatio } from './isothermal';
 import { marchedLine, type RisingSegment, upstreamPressure } from './march';
-import { type Enlargement, fluxOf, type LineGas, type LineSegment } from './segment';
+import { type Enlargement, fluxOf, type LineGas } from './segment';
 import { homogeneousMach, volumeAt, type VolumeCurve } from './volume';
 
 /** A point of a line: metres from the device, segment counted from 1, Pa absolute, m/s, Mach, K (where known), kg/m³. */
@@ -100,28 +100,4 @@ export function marchedProfile(
     const rho = 1 / volumeAt(curve, P);
     return { P, velocity: G / rho, mach: homogeneousMach(curve, G, P), rho };
   });
-}
-
-/** The highest Mach number of a line and the segment where it stands; Mach rises toward the end of every segment. */
-export function highestMach(worked: readonly { machOut: number }[]): { mach: number; segment: number } {
-  let best = { mach: 0, segment: 0 };
-  worked.forEach(({ machOut }, index) => {
-    if (machOut > best.mach) best = { mach: machOut, segment: index + 1 };
-  });
-  return best;
-}
-
-/** Segments as the bare line functions take them, from bores, lengths, friction and fittings; lists of the same length. */
-export function drawnSegments(
-  flows: readonly number[],
-  bores: readonly number[],
-  lengths: readonly number[],
-  heads: readonly number[],
-): DrawnSegment[] {
-  return bores.map((D, i): DrawnSegment & LineSegment => ({
-    D,
-    L: lengths[i] ?? 0,
-    N: heads[i] ?? 0,
-    W: flows[i] ?? flows[0] ?? 0,
-  }));
 }

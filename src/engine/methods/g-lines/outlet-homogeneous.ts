@@ -51,10 +51,11 @@ function readCurve(sheet: SheetBuilder): VolumeCurve {
   );
 }
 
-type Found = { inlet: number; outlet: number; choked: boolean; machOut: number };
+type Found = { inlet: number; outlet: number; choked: boolean; machOut: number; rises: boolean };
 
 /** The steps of one segment; `curve` gives the integral that the checker may repeat on the points. */
 function segmentSteps(sheet: SheetBuilder, i: number, count: number, found: Found, curve: VolumeCurve): void {
+  const { rises } = found;
   const beyond = i === count - 1 ? 'P_exit_ambient' : `pin ${i + 1}`;
   const named = (key: string, tex: string, meaning: string) => ({
     key: `${key} ${i}`,
@@ -83,7 +84,7 @@ function segmentSteps(sheet: SheetBuilder, i: number, count: number, found: Foun
       unit: 'kPa_abs',
     },
     (v) =>
-      `p: \\ \\frac{2 \\cdot 10^{3} \\, ${v(`I ${i}`)}}{${v(`G ${i}`)}^2} - 2 \\ln\\frac{v(${v(`pout ${i}`)})}{v(p)} = ${v(`N ${i}`)}`,
+      `p: \\ \\frac{2 \\cdot 10^{3} \\, ${v(`I ${i}`)}}{${v(`G ${i}`)}^2} - 2 \\ln\\frac{v(${v(`pout ${i}`)})}{v(p)} = ${v(`N ${i}`)}${rises ? ' + \\frac{2 \\cdot 9.80665}{G^2} \\int \\rho^2 \\, dz' : ''}`,
   );
   sheet.step(
     { ...named('Ma', 'Ma', 'Mach number of the mixture at the end'), value: found.machOut, unit: '-' },
@@ -96,7 +97,7 @@ function segmentSteps(sheet: SheetBuilder, i: number, count: number, found: Foun
 /** g.outlet-homogeneous: back pressure of homogeneous equilibrium flow, marched from the end of the line. */
 export const OUTLET_HOMOGENEOUS: Method = {
   id: 'g.outlet-homogeneous',
-  version: 1,
+  version: 2,
   topic: 'g.outlet-homogeneous',
   title: 'Outlet line of a two-phase flow: back pressure',
   editions: ['textbook'],
@@ -140,7 +141,7 @@ export const OUTLET_HOMOGENEOUS: Method = {
         const found = worked[i];
         if (!found) continue;
         fluxStep(sheet, i, count, (W[i] ?? 0) / boreArea(D[i] ?? 1));
-        segmentSteps(sheet, i, count, found, curve);
+        segmentSteps(sheet, i, count, { ...found, rises: (rise[i] ?? 0) !== 0 }, curve);
       }
       const highest = Math.max(...worked.map((one) => one.machOut));
       backPressureSteps(sheet, {

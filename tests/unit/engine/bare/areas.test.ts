@@ -32,11 +32,7 @@ import {
   isoLiquidArea,
   isoSteamArea,
 } from '../../../../src/engine/methods/i-iso4126/flow';
-
-/** Equal to a relative tolerance. */
-function near(actual: number | undefined, expected: number, tolerance = 1e-6): void {
-  expect(Math.abs((actual ?? Number.NaN) / expected - 1)).toBeLessThanOrEqual(tolerance);
-}
+import { near } from './near';
 
 const plain = { Kd: 0.975, Kb: 1, Kc: 1 };
 const example1: GasFlow = { W: 24270, T: 348, Z: 0.9, M: 51, k: 1.11, P1: 670, P2: 101.325, ...plain };
