@@ -4,7 +4,7 @@ import { workMethod } from '../../../../src/engine/catalog';
 import { cubicFluid } from '../../../../src/engine/fluids';
 import { compareFluxes } from '../../../../src/engine/methods/d-two-phase/compare-rows';
 import { omegaByProperties, omegaByVolumes } from '../../../../src/engine/methods/d-two-phase/fluid-omega';
-import { hemThroat } from '../../../../src/engine/nozzle/hem';
+import { hemThroat, pathState } from '../../../../src/engine/nozzle/hem';
 import { bubbleAt, inletAtQuality, inletAtTemperature } from '../../../../src/engine/nozzle/inlet';
 import { firstMaximum } from '../../../../src/engine/nozzle/maximum';
 import { smoothThroat } from '../../../../src/engine/nozzle/table';
@@ -269,18 +269,48 @@ describe('pressures and loads in every form', () => {
 });
 
 describe('where one omega does not follow the isentrope', () => {
-  it('the sheets of integration and comparison say so, near the critical point of propane', () => {
-    const inlet: Inputs = {
-      fluid: 'propane',
-      P0: q(4000, 'kPa_abs'),
-      x0: q(0, '-'),
-      back_pressure: q(100, 'kPa_abs'),
-      W: q(10000, 'kg/h'),
-    };
-    const compared = workMethod('d.comparison', inlet);
+  const dense: Inputs = { fluid: 'water', P0: q(30, 'MPa_abs'), T0: q(655, 'K') };
+
+  it('the sheets of integration and comparison say so, for water above its critical pressure', () => {
+    const compared = workMethod('d.comparison', { ...dense, back_pressure: q(100, 'kPa_abs') });
     expect(compared.refused).toBeUndefined();
-    expect(compared.warnings.map((one) => one.code)).toContain('OMEGA_NEAR_CRITICAL');
-    const sized = workMethod('d.hem-size', inlet);
-    expect(sized.warnings.map((one) => one.code)).toContain('CRITICAL_REGION');
+    expect(compared.warnings.map((one) => one.code)).toEqual(
+      expect.arrayContaining(['OMEGA_NEAR_CRITICAL', 'METHODS_DIFFER']),
+    );
+    const flux = workMethod('d.hem-nozzle', { ...dense, Pb: q(100, 'kPa_abs') });
+    expect(flux.warnings.map((one) => one.code)).toContain('OMEGA_DIFFERS');
+    expect(
+      workMethod('d.hem-nozzle', { ...dense, P0: q(23, 'MPa_abs'), Pb: q(100, 'kPa_abs') }).warnings.map(
+        (one) => one.code,
+      ),
+    ).toContain('CRITICAL_REGION');
+  });
+
+  it('the throat there is the greatest flux of the isentrope, found by trying two thousand pressures', () => {
+    for (const [P0, T0] of [
+      [24e6, 640],
+      [24e6, 660],
+      [30e6, 655],
+    ] as const) {
+      const inlet = inletAtTemperature(WATER, P0, T0);
+      if (!inlet) throw new Error('no inlet');
+      const all = Array.from(
+        { length: 2000 },
+        (_state, k) => pathState(WATER, inlet.state, P0 * (1 - (0.9 * k) / 2000))?.flux ?? 0,
+      );
+      const throat = hemThroat(WATER, inlet.state, 1e5)?.flux ?? 0;
+      expect(Math.abs(throat / Math.max(...all) - 1)).toBeLessThan(1e-3);
+    }
+  });
+
+  it('where the properties end before the throat, the integration is refused and the others stand', () => {
+    const cold: Inputs = { fluid: 'water', P0: q(700, 'Pa_abs'), T0: q(280, 'K') };
+    expect(workMethod('d.hem-nozzle', { ...cold, Pb: q(100, 'Pa_abs') }).refused).toMatchObject({
+      code: 'OUTSIDE_FORMULATION',
+      field: 'fluid',
+    });
+    const compared = workMethod('d.comparison', { ...cold, back_pressure: q(100, 'Pa_abs') });
+    expect(compared.refused).toBeUndefined();
+    expect(compared.warnings.map((one) => one.code)).toContain('NO_INTEGRATION');
   });
 });
