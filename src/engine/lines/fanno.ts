@@ -15,12 +15,15 @@ export function fannoPressureRatio(mach: number, k: number): number {
   return Math.sqrt((k + 1) / (2 + (k - 1) * mach ** 2)) / mach;
 }
 
+/** Fewer velocity heads than this are none: the friction function cannot tell them apart in double precision. */
+const LEAST_HEADS = 1e-14;
+
 /**
  * The s = 1/Ma² that lies N velocity heads upstream of `from`. Newton from below the root jumps above it and then comes down
  * monotonically, the function being convex; 60 rounds at most.
  */
 export function fannoUpstream(from: number, N: number, k: number): number {
-  if (!(N > 0)) return from;
+  if (!(N > LEAST_HEADS)) return from;
   const target = fannoOfS(from, k) + N;
   let s = from + k * N;
   for (let round = 0; round < 60; round += 1) {

@@ -63,9 +63,9 @@ export function volumeAt(curve: VolumeCurve, P: number): number {
   return at === undefined ? Number.NaN : at.a + at.b / P;
 }
 
-/** Mach number of the homogeneous mixture at P: G √|dv/dP| = G √b/P. */
+/** Mach number of the homogeneous mixture at P: G √|dv/dP| = G √b/P; at a point of the curve, that of the piece above it. */
 export function homogeneousMach(curve: VolumeCurve, G: number, P: number): number {
-  const at = pieceAt(curve, P);
+  const at = pieceAt(curve, P * (1 + 1e-12));
   return at === undefined ? Number.NaN : (G * Math.sqrt(at.b)) / P;
 }
 
