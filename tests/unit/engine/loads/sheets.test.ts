@@ -72,7 +72,7 @@ describe.each(CASES)('%s', (id, inputs) => {
       fc.boolean(),
       fc.constantFrom('gas', 'liquid', 'flashing', ''),
     );
-    const wide = (given: Inputs[string]) =>
+    const wide = (given: Inputs[string]): fc.Arbitrary<Inputs[string]> =>
       typeof given === 'object'
         ? fc.oneof(
             {
@@ -112,7 +112,8 @@ describe('printed constants that are rounded', () => {
     for (const id of ['f.control-valve-bypass', 'f.blowby-displacement']) {
       const inputs = EXAMPLES[id]!;
       const cv = (name: string) => ({ value: convert(inputs[name] as Q, 'Cv'), unit: 'Cv' });
-      const bypass = 'bypass_coefficient' in inputs ? { bypass_coefficient: cv('bypass_coefficient') } : {};
+      const bypass: Inputs =
+        'bypass_coefficient' in inputs ? { bypass_coefficient: cv('bypass_coefficient') } : {};
       const load = (given: Inputs) => (workMethod(id, given).outputs['relief_load'] as Q).value;
       const ratio = load({ ...inputs, coefficient: cv('coefficient'), ...bypass }) / load(inputs);
       expect(Math.abs(ratio - 1)).toBeGreaterThan(1e-4);
