@@ -1,5 +1,6 @@
 /* Boiling of a liquid at constant pressure with the vapour leaving: what is left, and the heat each kilogram of vapour takes. */
 import { type Boundary, fluidOf, type Substance } from '../../fluids';
+import { at } from '../../fluids/cubic/vector';
 import { type PhaseState } from '../../properties/types';
 import { GAS_CONSTANT } from '../a-gas/flow';
 
@@ -28,15 +29,13 @@ type Contents = { substances: readonly Substance[]; moles: number[] };
 const total = (a: readonly number[]) => a.reduce((sum, value) => sum + value, 0);
 
 function massOf({ substances, moles }: Contents): number {
-  return substances.reduce((sum, s, i) => sum + s.M[0] * (moles[i] ?? 0), 0);
+  return substances.reduce((sum, s, i) => sum + s.M[0] * at(moles, i), 0);
 }
 
 /** The first bubble of what is left. */
 function bubble({ substances, moles }: Contents, P: number): Boundary | undefined {
   const n = total(moles);
-  const kept = substances.flatMap((s, i) =>
-    (moles[i] ?? 0) > 1e-9 * n ? [{ s, z: (moles[i] ?? 0) / n }] : [],
-  );
+  const kept = substances.flatMap((s, i) => (at(moles, i) > 1e-9 * n ? [{ s, z: at(moles, i) / n }] : []));
   const sum = total(kept.map((k) => k.z));
   const found = fluidOf({ substances: kept.map((k) => k.s), z: kept.map((k) => k.z / sum) }).boundary(
     P,
@@ -44,14 +43,14 @@ function bubble({ substances, moles }: Contents, P: number): Boundary | undefine
   );
   if (found === undefined) return undefined;
   let next = 0;
-  const y = substances.map((_, i) => ((moles[i] ?? 0) > 1e-9 * n ? (found.y[next++] ?? 0) : 0));
+  const y = substances.map((_, i) => (at(moles, i) > 1e-9 * n ? at(found.y, next++) : 0));
   return { ...found, y };
 }
 
 /** What is left after `mass` kg of a vapour of mole fractions `y` has gone. */
 function without(contents: Contents, y: readonly number[], mass: number): Contents {
-  const M = contents.substances.reduce((sum, s, i) => sum + s.M[0] * (y[i] ?? 0), 0);
-  const moles = contents.moles.map((n, i) => Math.max(0, n - ((y[i] ?? 0) * mass) / M));
+  const M = contents.substances.reduce((sum, s, i) => sum + s.M[0] * at(y, i), 0);
+  const moles = contents.moles.map((n, i) => Math.max(0, n - (at(y, i) * mass) / M));
   return { substances: contents.substances, moles };
 }
 
@@ -67,7 +66,7 @@ export function boilingCurve(
   steps: number,
   last: number,
 ): { stretches: Stretch[]; ended?: Ended } {
-  const M = substances.reduce((sum, s, i) => sum + s.M[0] * (z[i] ?? 0), 0);
+  const M = substances.reduce((sum, s, i) => sum + s.M[0] * at(z, i), 0);
   const size = last / steps;
   let now: Contents = { substances, moles: z.map((share) => share / M) };
   let before = bubble(now, P);
@@ -82,7 +81,7 @@ export function boilingCurve(
     if (after === undefined) return { stretches, ended: end };
     const { vapour, liquid } = middle;
     const heat = (massOf(next) * after.liquid.h - massOf(now) * before.liquid.h) / size + vapour.h;
-    const vapourM = substances.reduce((sum, s, i) => sum + s.M[0] * (middle.y[i] ?? 0), 0);
+    const vapourM = substances.reduce((sum, s, i) => sum + s.M[0] * at(middle.y, i), 0);
     stretches.push({
       fraction: (k + 0.5) * size,
       T: middle.T,

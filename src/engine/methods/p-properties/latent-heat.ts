@@ -1,6 +1,7 @@
 /* Method p.latent-heat: boiling range and latent heat of a liquid at relieving pressure. */
 import { type Method } from '../../catalog/types';
 import { type Boundary, type CubicFluid } from '../../fluids';
+import { at } from '../../fluids/cubic/vector';
 import { type SheetBuilder, workSheet } from '../../sheet';
 import { GAS_CONSTANT } from '../a-gas/flow';
 import { optional, output, RELIEVING_INPUTS } from '../common/describe';
@@ -74,13 +75,13 @@ function vapourLines(sheet: SheetBuilder, cubic: CubicFluid | undefined, bubble:
           key: `y_${i}`,
           tex: `y_{${i + 1}}`,
           meaning: `mole fraction of ${s.name} in the first vapour`,
-          value: bubble.y[i] ?? 0,
+          value: at(bubble.y, i),
           unit: '-',
         },
         () => `z_{${i + 1}} \\frac{\\varphi_{${i + 1}}^l}{\\varphi_{${i + 1}}^v}`,
       );
     });
-  const M = n > 1 ? substances.reduce((sum, s, i) => sum + s.M[0] * (bubble.y[i] ?? 0), 0) : undefined;
+  const M = n > 1 ? substances.reduce((sum, s, i) => sum + s.M[0] * at(bubble.y, i), 0) : undefined;
   const molar = M ?? substances[0]?.M[0] ?? 18.015257;
   sheet.output('vapour_M', molar, 'kg/kmol');
   sheet.output('vapour_density', bubble.vapour.rho, 'kg/m3');

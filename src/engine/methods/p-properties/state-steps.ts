@@ -140,6 +140,10 @@ export function liquidSteps(sheet: SheetBuilder, fluid: CubicFluid, state: Phase
     },
     () => '-\\frac{1}{v} \\left(\\frac{\\partial v}{\\partial P}\\right)_T',
   );
+  sheet.warn(
+    'EXPANSION_APPROXIMATE',
+    'The expansion coefficient and the compressibility of a liquid by a cubic equation may be off by 20 %, the expansion most often low, and with it a thermal-expansion load: take measured ones where they matter.',
+  );
   sheet.output('expansion_coefficient', f.expansion, '1/K');
   sheet.output('compressibility', f.compressibility * 1e9, '1/GPa');
 }

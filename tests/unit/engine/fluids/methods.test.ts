@@ -77,6 +77,20 @@ describe('p.fluid-properties', () => {
     expect(refused?.text).toMatch(says);
   });
 
+  it('shows a liquid by Rackett where a factor is known, and its expansion in any case', () => {
+    const liquid = (fluid: string) => properties({ fluid, P1: bar(10), T: K(300) }).outputs;
+    expect(figure(liquid('toluene')['density_rackett'])).toBeGreaterThan(840);
+    expect(liquid('aniline')['density_rackett']).toBeUndefined();
+    // Cubic expansion of toluene near 300 K: 1.08e-3 1/K (handbook value, from memory). The cubic gives 0.86e-3, a fifth
+    // less: not tuned, the sheet warns.
+    expect(codes(properties({ fluid: 'toluene', P1: bar(10), T: K(300) }))).toContain(
+      'EXPANSION_APPROXIMATE',
+    );
+    expect(figure(liquid('toluene')['expansion_coefficient'])).toBeGreaterThan(0.00108 * 0.78);
+    expect(figure(liquid('toluene')['expansion_coefficient'])).toBeLessThan(0.00108 * 1.05);
+    expect(figure(liquid('aniline')['expansion_coefficient'])).toBeGreaterThan(0);
+  });
+
   it('agrees in SI and customary units', () => {
     const si = properties({ fluid: 'propane', P1: bar(10), T: K(350) });
     const us = properties({
@@ -181,6 +195,14 @@ describe('p.boiling-curve', () => {
     });
     expect(codes(w)).not.toContain('GOVERNS_LATER');
     expect(figure(w.outputs['governing_fraction'])).toBeLessThan(0.01);
+  });
+
+  it('ends where what is left has no bubble point, and warns near the critical point', () => {
+    const w = curve({ fluid: 'propane 0.5; n-decane 0.5', P1: bar(25), Q: MW });
+    expect(codes(w)).toContain('CURVE_ENDS');
+    expect(figure(w.outputs['points'])).toBeLessThan(20);
+    expect(figure(w.outputs['points'])).toBeGreaterThan(2);
+    expect(codes(curve({ fluid: 'propane', P1: bar(42), Q: MW }))).toContain('LATENT_HEAT_LOW');
   });
 
   it('scales with the heat and nothing else', () => {
