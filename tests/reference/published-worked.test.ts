@@ -23,7 +23,7 @@ describe('published worked examples', () => {
 
   it('hold the figures of the examples as they were found', () => {
     const known = new Set(
-      (published as { inputs: Record<string, { value: unknown }> }[]).flatMap(({ inputs }) =>
+      (published as unknown as { inputs: Record<string, { value: unknown }> }[]).flatMap(({ inputs }) =>
         Object.values(inputs).map(({ value }) => value),
       ),
     );
