@@ -40,8 +40,7 @@ const GROUPS: Record<string, string> = {
   i: 'Sizes and ratings',
   j: 'Devices',
   k: 'Storage tanks',
-  t: 'Thermal and reaction loads',
-  x: 'Site methods',
+  p: 'Properties',
 };
 
 const keyOf = (method: Method) => method.id.split('.')[0] ?? '';
