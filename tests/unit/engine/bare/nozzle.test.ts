@@ -136,12 +136,13 @@ describe('tabulated isentropes', () => {
     if (!found?.inputs.P || !found.inputs.v) throw new Error(`${id} is missing`);
     const P = (found.inputs.P.value as number[]).map((p) => p * 1e3);
     const table = { P, v: found.inputs.v.value as number[] };
-    const expected = found.expected as Record<string, { value: number }>;
+    const expected = (key: string) =>
+      Number(Object.entries(found.expected).find(([k]) => k === key)?.[1].value);
     const rows = trapezoidThroat(table, 101325);
-    near(rows.flux, expected.mass_flux_trapezoid?.value ?? 0, 2e-4);
-    near(rows.P, (expected.throat_pressure_grid_point?.value ?? 0) * 1e3, 1e-9);
+    near(rows.flux, expected('mass_flux_trapezoid'), 2e-4);
+    near(rows.P, expected('throat_pressure_grid_point') * 1e3, 1e-9);
     expect(rows.choked).toBe(true);
-    near(smoothThroat(table, 101325)?.flux, expected.mass_flux_exact?.value ?? 0, 1e-3);
+    near(smoothThroat(table, 101325)?.flux, expected('mass_flux_exact'), 1e-3);
   });
 
   it('adds trapezia by hand: 1 000, 800, 600 Pa at 0.01, 0.012, 0.02 m³/kg', () => {
