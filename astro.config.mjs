@@ -40,6 +40,6 @@ export default defineConfig({
       // The pure layers do nothing when they are loaded: what an island does not use of them stays out of its script.
       rollupOptions: { treeshake: { moduleSideEffects: (id) => !PURE.test(id) } },
     },
-    ssr: { external: ['better-sqlite3', 'knex', '@node-rs/argon2'] },
+    ssr: { external: ['better-sqlite3', 'knex', '@node-rs/argon2', '@react-pdf/renderer'] },
   },
 });

@@ -16,6 +16,7 @@ const LAYERS = {
   'src/notices': ['src/domain', 'src/data', 'src/engine'],
   'src/files': ['src/domain', 'src/data', 'src/engine'],
   'src/services': ['src/domain', 'src/data', 'src/engine', 'src/checks', 'workflows', 'src/notices', 'src/files', 'src/auth'],
+  'src/papers': ['src/domain', 'src/engine', 'src/services'],
   'src/islands': ['src/domain', 'src/engine', 'workflows'],
   'src/components': ['src/domain', 'src/engine', 'src/services', 'src/islands'],
   'src/layouts': ['src/domain', 'src/engine', 'src/services', 'src/components', 'src/islands', 'src/styles'],

@@ -3,7 +3,7 @@ import AxeBuilder from '@axe-core/playwright';
 import { type Page } from '@playwright/test';
 import { expect, test } from '../support/fixtures';
 import { closeBrowsers, pageOf } from './support/people';
-import { COORDINATORS, NOWHERE, ONE_OF_EACH, PAGES } from './support/routes';
+import { COORDINATORS, NOWHERE, ONE_OF_EACH, OVERSEERS, PAGES } from './support/routes';
 
 // One test a page, shared out between the workers.
 test.describe.configure({ mode: 'parallel' });
@@ -22,13 +22,13 @@ async function axe(page: Page, what: string): Promise<void> {
 
 /** Who has most to do on a page, so that axe reads its forms too. */
 function readerOf(path: string): string {
-  if (path.includes('/people')) return ONE_OF_EACH.coordinator;
+  if (path.includes('/people') || path.includes('/moved')) return ONE_OF_EACH.coordinator;
   if (path.includes('KW-2026-008')) return ONE_OF_EACH.checker;
   if (path.includes('/summary')) return 'Rufus Hallam';
   return path.includes('/field') ? ONE_OF_EACH.operations : ONE_OF_EACH.originator;
 }
 
-for (const path of [...PAGES, ...COORDINATORS, ...NOWHERE.slice(0, 1)]) {
+for (const path of [...PAGES, ...COORDINATORS, ...OVERSEERS, ...NOWHERE.slice(0, 1)]) {
   test(`axe finds nothing on ${path}`, async ({ browser, server }) => {
     const page = await pageOf(browser, server, readerOf(path));
     await page.setViewportSize(WIDE);

@@ -3,7 +3,7 @@ import { type Page, type Response } from '@playwright/test';
 import { gzipSync } from 'node:zlib';
 import { expect, test } from '../support/fixtures';
 import { closeBrowsers, pageOf, SITE } from './support/people';
-import { COORDINATORS, NOWHERE, ONE_OF_EACH, PAGES } from './support/routes';
+import { COORDINATORS, NOWHERE, ONE_OF_EACH, OVERSEERS, PAGES } from './support/routes';
 
 test.afterEach(closeBrowsers);
 
@@ -40,6 +40,8 @@ for (const [role, name] of Object.entries(ONE_OF_EACH)) {
       expect.soft(said.splice(0), path).toEqual([]);
     }
     for (const path of COORDINATORS) await visit(page, path, role === 'coordinator' ? 200 : 403);
+    const oversees = role === 'coordinator' || role === 'auditor';
+    for (const path of OVERSEERS) await visit(page, path, oversees ? 200 : 403);
     for (const path of NOWHERE) await visit(page, path, 404);
   });
 }

@@ -16,6 +16,7 @@ export const PAGES: readonly string[] = [
   `${SITE}/register/relief-points`,
   `${SITE}/rulebook`,
   `${SITE}/methods`,
+  `${SITE}/methods?topic=b`,
   `${SITE}/methods/a.gas`,
   `${SITE}/cases`,
   `${SITE}/cases/new`,
@@ -43,6 +44,8 @@ export const PAGES: readonly string[] = [
 ];
 /** Pages of the site coordinator. */
 export const COORDINATORS: readonly string[] = [`${SITE}/people/new`];
+/** Pages of those who oversee: site coordinators and auditors. */
+export const OVERSEERS: readonly string[] = [`${SITE}/methods/moved`];
 /** Addresses where nothing is. */
 export const NOWHERE: readonly string[] = [
   '/no-such-page',
