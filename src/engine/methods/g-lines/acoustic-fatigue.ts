@@ -1,6 +1,6 @@
 /* Method g.acoustic-fatigue: sound power inside a pipe behind a pressure let-down, held against a screening level. */
 import { type Method } from '../../catalog/types';
-import { soundPower, soundPowerAfter } from '../../lines/discharge';
+import { soundPower, soundPowerAfter, soundSum } from '../../lines/discharge';
 import { workSheet } from '../../sheet';
 import { input, optional, output } from '../common/describe';
 import { absoluteIn } from '../common/pressures';
@@ -92,7 +92,7 @@ export const ACOUSTIC_FATIGUE: Method = {
                 key: 'sum',
                 tex: 'L_{W,t}',
                 meaning: 'sound power level with the other sources',
-                value: 10 * Math.log10(10 ** (level / 10) + 10 ** (other / 10)),
+                value: soundSum([level, other]),
                 unit: 'dB',
               },
               (v) => `10 \\log_{10}\\left(10^{${v('own')}/10} + 10^{${v('other_sources')}/10}\\right)`,

@@ -33,7 +33,7 @@ function readPoints(sheet: SheetBuilder): VolumePoint[] {
 }
 
 /** The curve of the sheet: through its points, or the omega form from one state. */
-function readCurve(sheet: SheetBuilder): VolumeCurve {
+export function readCurve(sheet: SheetBuilder): VolumeCurve {
   if (!sheet.has('P_point')) {
     const P0 = absoluteIn(sheet, 'P0', 'P_0', 'kPa_abs');
     const v0 = sheet.number('v0', 'm3/kg', { above: 0 }, 'v_0');
