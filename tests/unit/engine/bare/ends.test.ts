@@ -173,6 +173,7 @@ describe('discharges', () => {
     near(noiseChart(2.92), 4.8239 * Math.log10(2.92) + 51.6217, 1e-12);
     near(noiseAt(113.68411, 300), 93.68411, 1e-9);
     near(noiseAt(113.68411, 10, 100), 133.68411, 1e-9);
+    near(noiseAt(113.68411, 60), 113.68411 - 6.02059991, 1e-9);
     near(soundSum([90, 90]), 93.01029996, 1e-9);
     near(soundSum([90, 80]), 90.41392685, 1e-9);
   });

@@ -281,6 +281,7 @@ describe('lines full of liquid', () => {
   it('adds friction and weight by hand: 1 m/s of 1 000 kg/m³, 4 heads and 3 m', () => {
     near(liquidDrop(first, 1000), 2000 + 29419.95, 1e-9);
     near(liquidDrop(second, 1000), 1000, 1e-9);
+    near(liquidDrop({ ...second, W: 5 * Math.PI }, 1000), 4000, 1e-9);
     const [upper, lower] = liquidLine([first, second], 1000, 1e5);
     near(lower, 101000, 1e-9);
     near(upper, 132419.95, 1e-9);
