@@ -114,7 +114,7 @@ describe('sheets at their borders', () => {
   it('refuses steam that the superheat table does not reach, and a table without temperature', () => {
     const refused = (inputs: Inputs) => workMethod('b.steam', inputs).refused?.code;
     expect(refused({ ...steam, T: q(1400, 'K') })).toBe('OUTSIDE_TABLE');
-    expect(refused({ W: steam.W, P1: steam.P1 } as Inputs)).toBe('INPUT_MISSING');
+    expect(refused({ W: q(69615, 'kg/h'), P1: q(12236, 'kPa_abs') })).toBe('INPUT_MISSING');
     expect(refused(steam)).toBeUndefined();
   });
 
