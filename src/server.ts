@@ -2,16 +2,22 @@
 import { channel } from 'node:diagnostics_channel';
 import { createServer, type RequestListener, type Server } from 'node:http';
 import { type AddressInfo } from 'node:net';
+import { setTimeout as wait } from 'node:timers/promises';
 import { createExports as adapterExports } from '@astrojs/node/server.js';
 import { type SSRManifest } from 'astro';
 import { readConfig, type Config } from './config';
 import { SECURITY_HEADERS } from './http/headers';
 import { startRuntime, type Runtime } from './runtime';
+import { workChecksAhead } from './services/views/method-checks';
 
 type AdapterOptions = Parameters<typeof adapterExports>[1];
 
 /** How long open requests may take to finish after SIGTERM. */
 const GRACE = 5_000;
+
+/** When the check values of the methods are worked, after the start and between two methods: never before a reader. Milliseconds. */
+const AHEAD_AFTER = 20_000;
+const AHEAD_PAUSE = 100;
 
 /** Says why the server can't start, without a stack, and ends. */
 function giveUp(sentences: string[]): never {
@@ -98,6 +104,8 @@ async function run(manifest: SSRManifest, options: AdapterOptions): Promise<void
     'listening',
   );
   channel('setwright:listening').publish({ port });
+  await wait(AHEAD_AFTER, undefined, { ref: false });
+  await workChecksAhead(() => wait(AHEAD_PAUSE, undefined, { ref: false }));
 }
 
 /** Astro's generated entry calls this as soon as it is loaded. */
