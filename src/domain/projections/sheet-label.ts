@@ -17,6 +17,13 @@ export const SHEET_KINDS: Readonly<Record<string, string>> = {
   header: 'Header',
 };
 
+/** What tells two sheets of one relief point apart: the vacuum side, or who else relieves through the outlet. */
+function sideOf(kind: string, part: string | undefined): string {
+  if (part === 'vacuum') return ' under vacuum';
+  if (kind !== 'outlet' || part === undefined) return '';
+  return part === 'own' ? ' of its own relief' : ' in a common cause';
+}
+
 /**
  * The name of a sheet: what it works, and for which scenario or relief point.
  * @example sheetLabel(basis, 'size:cooling-water-loss/ans_g1') → "Required area, Loss of cooling water"
@@ -33,6 +40,6 @@ export function sheetLabel(doc: Basis, key: string): string {
   }
   const about =
     doc.reliefPoints.find((one) => one.id === id)?.tag ?? doc.groups.find((one) => one.id === id)?.name;
-  const side = answerId === 'vacuum' ? ' under vacuum' : '';
+  const side = sideOf(kind, answerId);
   return about === undefined ? `${words}${side}` : `${words}${side}, ${about}`;
 }
