@@ -21,7 +21,7 @@ const PAGES = {
   error: ErrorGallery,
 };
 const CAUTION = 'An aid to qualified engineers.';
-/** Words that are not used (the words of the blueprint win), looked for in what readers see. */
+/** Words that are not used (the product has its own), looked for in what readers see. */
 const NOT_USED = /\b(?:blind|sealed|ticked|ripple|desk|approved by Setwright)\b/i;
 
 describe('pages of the gallery', () => {
